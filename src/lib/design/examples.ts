@@ -1,5 +1,5 @@
 /** Three worked designs of invented companies: the demo, the examples to start from, and the scenarios of the tests. */
-import type { Design } from '$lib/design/design';
+import type { Design } from './design';
 
 const tenPercent = { toleranceMinus: 0.1, tolerancePlus: 0.1 } as const;
 
