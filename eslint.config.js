@@ -178,8 +178,9 @@ export default defineConfig(
 		}
 	},
 	{
-		// A describe block wraps its whole table, so its length says nothing about a function's.
+		// A describe block wraps its whole table, so its length says nothing about a function's; and the
+		// parameters of a table's function are the table's columns.
 		files: ['**/*.test.ts', 'tests/**/*.{ts,mjs}'],
-		rules: { 'max-lines-per-function': 'off' }
+		rules: { 'max-lines-per-function': 'off', 'max-params': 'off' }
 	}
 );
