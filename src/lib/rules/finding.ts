@@ -1,5 +1,5 @@
 /** What a rule says of a design, and what the whole evaluation says of it. All values in SI base units. */
-import type { RuleClass, RuleKind } from '$lib/design/design';
+import type { Override, RuleClass, RuleKind } from '$lib/design/design';
 import type { Quantity } from '$lib/quantity/unit';
 import type { SeriesName } from '$lib/quantity/series';
 
@@ -13,6 +13,8 @@ export type FormulaPart =
 			readonly quantity: Quantity;
 			/** Significant digits; absent prints the value as it was given (up to 12). */
 			readonly digits?: number;
+			/** Direction that keeps a printed limit on the safe side; absent rounds to the nearest. */
+			readonly round?: 'up' | 'down';
 	  };
 
 /** `general` = `numbers` = `result`: the law, the law with the numbers put in, and the limit that follows. */
@@ -46,6 +48,8 @@ export interface Finding {
 	readonly cautions: readonly string[];
 	/** The rule of thumb's edges beside an exact band that differs by more than 5 %, for a thin line on the chart [F]. */
 	readonly thumbEdges?: readonly { readonly capacitance: number; readonly label: string }[];
+	/** Present where a named person put this design or advisory rule aside: it closes no window. */
+	readonly override?: Override;
 }
 
 /** A closed interval of real capacitance that mandatory and design rules leave [F]. */
