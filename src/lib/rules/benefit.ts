@@ -1,50 +1,72 @@
 /** The benefit of a nominal value at every line of every source. */
 import type { Design } from '$lib/design/design';
-import { benefitAt } from '$lib/network/benefit';
-import { sourceImpedance } from '$lib/network/source';
-import { capacitorPart, filterOf, sourceModel } from './circuit';
+import { benefitFinder, type BenefitFinder } from '$lib/network/benefit';
+import type { ImpedanceCurve } from '$lib/network/curve';
+import type { Interval } from '$lib/quantity/interval';
+import { capacitorPart, filterOf, partCurves, sourceCurves, sourceModel, uncovered } from './circuit';
 import type { Benefit } from './finding';
 import { linesOf } from './lines';
 
-export function benefitMeter(design: Design): (capacitance: number) => Benefit[] {
+/** Gains of one nominal value, and the lines of which a measured curve knows nothing. */
+export interface Gains {
+	readonly benefits: readonly Benefit[];
+	/** In words, one per line. */
+	readonly gaps: readonly string[];
+}
+
+interface MeteredLine {
+	readonly benefit: Pick<Benefit, 'source' | 'switching' | 'harmonic'>;
+	readonly range: Interval;
+	readonly label: string;
+	readonly curves: readonly ImpedanceCurve[];
+	readonly finder: () => BenefitFinder;
+}
+
+/** Samples of the network are taken when they are first asked for, and serve every value after that. */
+const meteredLines = (design: Design): MeteredLine[] => {
 	const filter = filterOf(design);
-	const lines = linesOf(design);
-	return (capacitance) =>
-		design.sources.flatMap((source) =>
-			lines.map((line): Benefit => {
-				const model = sourceModel(design, source);
-				let best: Benefit | null = null;
-				for (let i = 0; i <= 20; i += 1) {
-					const frequency = line.from * (line.to / line.from) ** (i / 20);
-					const choices =
-						model.kind === 'impedance'
-							? Array.from(
-									{ length: 21 },
-									(_, k) => model.inductanceMin + ((model.inductanceMax - model.inductanceMin) * k) / 20
-								)
-							: [null];
-					for (const inductance of choices) {
-						const z = sourceImpedance(model, frequency, inductance ?? undefined);
-						const gain_dB = benefitAt(
-							filter,
-							z,
-							capacitorPart(design, design.choice, capacitance),
-							frequency
-						);
-						if (best === null || gain_dB < best.gain_dB) {
-							best = {
-								source: source.id,
-								switching: line.switching.id,
-								harmonic: line.harmonic,
-								frequency,
-								inductance,
-								gain_dB
-							};
-						}
-					}
-				}
-				if (best === null) throw new RangeError('no line');
-				return best;
-			})
+	return design.sources.flatMap((source) => {
+		const model = sourceModel(design, source);
+		const curves = [...partCurves(filter), ...sourceCurves(model)];
+		return linesOf(design).map((line): MeteredLine => {
+			let finder: BenefitFinder | null = null;
+			return {
+				benefit: { source: source.id, switching: line.switching.id, harmonic: line.harmonic },
+				range: line,
+				label: source.label,
+				curves,
+				finder: () => (finder ??= benefitFinder(filter, model, line))
+			};
+		});
+	});
+};
+
+/**
+ * Prepares the benefits of a design: for every source and line the least gain over the frequency range and the range
+ * of the source's inductance, other parts nominal and real, Cx with the choice's resistance and inductance.
+ * @param design the worksheet's design
+ * @returns a function from a nominal value [F] to its gains [dB]
+ * @example benefitMeter(chargerAuxiliary)(330e-9).benefits[0].gain_dB // 21.05
+ * Source: nodal analysis of the ladder.
+ */
+export function benefitMeter(design: Design): (capacitance: number) => Gains {
+	const lines = meteredLines(design);
+	const { choice } = design;
+	const { curve: _, ...unmeasured } = choice;
+	return (capacitance) => {
+		const part = capacitorPart(
+			design,
+			capacitance === choice.capacitance_F ? choice : unmeasured,
+			capacitance
 		);
+		const benefits: Benefit[] = [];
+		const gaps: string[] = [];
+		const measured = part.curve === undefined ? [] : [part.curve];
+		for (const { benefit, range, label, curves, finder } of lines) {
+			const gap = uncovered([...curves, ...measured], range);
+			if (gap === null) benefits.push({ ...benefit, ...finder().worst(part) });
+			else gaps.push(`No benefit known on ${label}. ${gap}`);
+		}
+		return { benefits, gaps };
+	};
 }

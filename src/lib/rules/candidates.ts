@@ -2,6 +2,7 @@
 import type { Design, Source } from '$lib/design/design';
 import { relativelyEqual } from '$lib/quantity/interval';
 import { coarsestSeries, preferredValues, SERIES_NAMES } from '$lib/quantity/series';
+import type { Gains } from './benefit';
 import type { Benefit, Candidate, Finding, Window } from './finding';
 import { toleranceInterval, warningsOf } from './warnings';
 import { closesWindows } from './windows';
@@ -57,42 +58,53 @@ const byRank = (a: Place, b: Place): number => {
  * @param design the worksheet's design
  * @param windows what the rules leave [F]
  * @param findings what the rules answered
- * @param benefitOf gains of a nominal value
+ * @param gainsOf gains of a nominal value
  * @returns candidates, best first
- * @example candidatesOf(design, windows, findings, benefitOf)[0].capacitance // 3.3e-7
+ * @example candidatesOf(design, windows, findings, gainsOf)[0].capacitance // 3.3e-7
  * Source: common practice.
  */
 export function candidatesOf(
 	design: Design,
 	windows: readonly Window[],
 	findings: readonly Finding[],
-	benefitOf: (capacitance: number) => readonly Benefit[]
+	gainsOf: (capacitance: number) => Gains
 ): Candidate[] {
 	const { choice, sources } = design;
 	const ranked = windows.flatMap((window, index) => placesIn(window, index, choice.series)).sort(byRank);
 	return ranked.slice(0, MOST).map(({ capacitance, window, nominalFrom, nominalTo }) => {
-		const benefit = benefitOf(capacitance);
+		const gains = gainsOf(capacitance);
 		return {
 			capacitance,
 			series: coarsestSeries(capacitance) ?? choice.series,
 			window,
 			marginFrom: capacitance / nominalFrom - 1,
 			marginTo: nominalTo / capacitance - 1,
-			warnings: warningsOf(toleranceInterval(capacitance, choice), benefit, findings, sources),
-			benefit
+			warnings: warningsOf(toleranceInterval(capacitance, choice), gains, findings, sources),
+			benefit: gains.benefits
 		};
 	});
 }
 
 /** Networks always count; another source counts where a rule that closes windows names it. */
-const countingSources = (design: Design, findings: readonly Finding[]): ReadonlySet<string> => {
+const countingSources = (design: Design, findings: readonly Finding[]): readonly string[] => {
 	const closing = new Set(findings.filter(closesWindows).map(({ rule }) => rule));
-	const named = design.rules.flatMap((rule) =>
-		'source' in rule && closing.has(rule.id) ? [rule.source] : []
+	const named = new Set(
+		design.rules.flatMap((rule) => ('source' in rule && closing.has(rule.id) ? [rule.source] : []))
 	);
 	const isNetwork = ({ kind }: Source): boolean => kind !== 'impedance' && kind !== 'measured';
-	return new Set([...named, ...design.sources.filter(isNetwork).map(({ id }) => id)]);
+	return design.sources.filter((source) => isNetwork(source) || named.has(source.id)).map(({ id }) => id);
 };
+
+/** Every fundamental on every source that counts must be known not to get worse. */
+const isHarmless = (design: Design, sources: readonly string[], benefits: readonly Benefit[]): boolean =>
+	sources.every((source) =>
+		design.switching.every(({ id }) =>
+			benefits.some(
+				(entry) =>
+					entry.source === source && entry.switching === id && entry.harmonic === 1 && entry.gain_dB >= 0
+			)
+		)
+	);
 
 const byWidth =
 	(windows: readonly Window[]) =>
@@ -123,9 +135,7 @@ export function recommendedOf(
 		return null;
 	const sources = countingSources(design, findings);
 	const harmless = candidates.filter(
-		({ window, benefit }) =>
-			windows[window]?.degenerate === false &&
-			benefit.every(({ source, harmonic, gain_dB }) => harmonic !== 1 || gain_dB >= 0 || !sources.has(source))
+		({ window, benefit }) => windows[window]?.degenerate === false && isHarmless(design, sources, benefit)
 	);
 	const widest = [...new Set(harmless.map(({ window }) => window))].sort(byWidth(windows))[0];
 	return harmless.find(({ window }) => window === widest)?.capacitance ?? null;

@@ -1,8 +1,10 @@
 /** The design's parts as the network room takes them. */
 import type { Capacitor, CapacitorParasitics, Design, Inductor, Source } from '$lib/design/design';
-import { impedanceCurve, type ImpedanceCurve } from '$lib/network/curve';
+import { covers, impedanceCurve, type ImpedanceCurve } from '$lib/network/curve';
 import type { CapacitorPart, Filter, InductorPart } from '$lib/network/filter';
 import type { SourceModel } from '$lib/network/source';
+import type { Interval } from '$lib/quantity/interval';
+import { wordedRange } from './wording';
 
 const curveOf = (design: Pick<Design, 'curves'>, id: string): ImpedanceCurve => {
 	const curve = design.curves?.find((entry) => entry.id === id);
@@ -79,4 +81,41 @@ export function sourceModel(design: Pick<Design, 'curves'>, source: Source): Sou
 		inductanceMin: source.inductanceMin_H,
 		inductanceMax: source.inductanceMax_H
 	};
+}
+
+/**
+ * Lists the measured curves that stand for parts of the filter.
+ * @param filter the filter
+ * @returns curves
+ * @example partCurves(filterOf(chargerAuxiliary)) // []
+ * Source: common practice.
+ */
+export function partCurves({ inductor, capacitor }: Filter): ImpedanceCurve[] {
+	return [inductor.curve, capacitor.curve].filter((curve) => curve !== undefined);
+}
+
+/**
+ * Lists the measured curve that stands for a source.
+ * @param source the model
+ * @returns the curve alone, or nothing
+ * @example sourceCurves({ kind: 'an-5uH', networks: 1 }) // []
+ * Source: common practice.
+ */
+export function sourceCurves(source: SourceModel): ImpedanceCurve[] {
+	return source.kind === 'measured' ? [source.curve] : [];
+}
+
+/**
+ * Says where a curve was not measured that a frequency range needs.
+ * @param curves curves in use
+ * @param range frequencies needed [Hz]
+ * @returns a sentence, or null where all curves cover the range
+ * @example uncovered([], { from: 126e3, to: 138e3 }) // null
+ * Source: a curve is never extrapolated.
+ */
+export function uncovered(curves: readonly ImpedanceCurve[], range: Interval): string | null {
+	const short = curves.find((curve) => !covers(curve, range.from) || !covers(curve, range.to));
+	if (short === undefined) return null;
+	const measured = wordedRange(short.first.frequency, short.last.frequency, 'frequency');
+	return `A measured curve covers ${measured} and not ${wordedRange(range.from, range.to, 'frequency')}: measure further, or leave the curve out.`;
 }

@@ -19,18 +19,18 @@ import { closingBands, windowsOf } from './windows';
 export function evaluate(design: Design): Evaluation {
 	const findings = findingsOf(design);
 	const windows = windowsOf(closingBands(findings), design.choice);
-	const benefitOf = benefitMeter(design);
-	const candidates = candidatesOf(design, windows, findings, benefitOf);
+	const gainsOf = benefitMeter(design);
+	const candidates = candidatesOf(design, windows, findings, gainsOf);
 	const chosen = design.choice.capacitance_F;
-	const benefit = chosen === null ? [] : benefitOf(chosen);
+	const gains = chosen === null ? { benefits: [], gaps: [] } : gainsOf(chosen);
 	return {
 		engine: ENGINE_VERSION,
 		findings,
 		windows,
 		candidates,
 		recommended: recommendedOf(design, windows, findings, candidates),
-		choice: verdictOf(design, windows, findings, benefit),
+		choice: verdictOf(design, windows, findings, gains),
 		conflict: conflictOf(design, findings),
-		benefit
+		benefit: gains.benefits
 	};
 }

@@ -1,13 +1,18 @@
 /** The distance kept from the resonance of Cx with L and the source at every line. */
 import type { Design, ResonanceGuardRule, Source } from '$lib/design/design';
-import { asymptoticInductance } from '$lib/network/source';
+import type { Filter } from '$lib/network/filter';
+import { approximateWorstCapacitance, cornerFrequency } from '$lib/network/resonance';
+import { asymptoticInductance, type SourceModel } from '$lib/network/source';
 import { uniteOpen, type Interval } from '$lib/quantity/interval';
+import { filterOf, partCurves, sourceCurves, sourceModel, uncovered } from './circuit';
 import type { Band, Finding, Formula, FormulaPart } from './finding';
 import { computed, given, parts, symbol } from './formula';
 import { linesOf, sourceOf, type Line } from './lines';
 import type { Method } from './method';
 import { evaluated, notEvaluated } from './outcome';
+import { toleranceInterval } from './warnings';
 import { plain, worded, wordedRange } from './wording';
+import { worstRange, type Box } from './worst-capacitance';
 
 export const RESONANCE_GUARD: Method = {
 	kind: 'resonance-guard',
@@ -35,6 +40,9 @@ export const RESONANCE_GUARD: Method = {
 	]
 };
 
+/** The rule of thumb is drawn beside the exact band from this difference in capacitance on. */
+const THUMB_DIFFERENCE = 0.05;
+
 const guardOf = (rule: ResonanceGuardRule, line: Line): number =>
 	line.harmonic === 1 ? rule.guard : rule.harmonicGuard;
 
@@ -48,15 +56,11 @@ const inductanceRange = (source: Source): Interval | null => {
 	return { from: inductance, to: inductance };
 };
 
-/** C0 = 1/((2πf)²·L∥Ls), without bound where the source has no inductance. */
-const thumbCapacitance = (frequency: number, inductance: number, sourceInductance: number): number =>
-	(1 / inductance + 1 / sourceInductance) / (2 * Math.PI * frequency) ** 2;
-
 const thumbRange = (design: Design, line: Line, source: Interval): Interval => {
 	const { inductance_H: inductance, toleranceMinus, tolerancePlus } = design.inductor;
 	return {
-		from: thumbCapacitance(line.to, inductance * (1 + tolerancePlus), source.to),
-		to: thumbCapacitance(line.from, inductance * (1 - toleranceMinus), source.from)
+		from: approximateWorstCapacitance(line.to, inductance * (1 + tolerancePlus), source.to),
+		to: approximateWorstCapacitance(line.from, inductance * (1 - toleranceMinus), source.from)
 	};
 };
 
@@ -64,7 +68,7 @@ const thumbRange = (design: Design, line: Line, source: Interval): Interval => {
 const highestCorner = ({ inductor, capacitor }: Design): number => {
 	const inductance = inductor.inductance_H * (1 - inductor.toleranceMinus);
 	const capacitance = capacitor.capacitance_F * (1 - capacitor.toleranceMinus);
-	return 1 / (2 * Math.PI * Math.sqrt(inductance * capacitance));
+	return cornerFrequency(inductance, capacitance);
 };
 
 interface GuardedRange {
@@ -141,17 +145,73 @@ const approximate = (design: Design, rule: ResonanceGuardRule, source: Source): 
 	});
 };
 
+const boxOf = (design: Design, filter: Filter, source: SourceModel, line: Line): Box => {
+	const { inductor, capacitor } = design;
+	return {
+		filter,
+		inductance: toleranceInterval(inductor.inductance_H, inductor),
+		capacitance: toleranceInterval(capacitor.capacitance_F, capacitor),
+		source,
+		frequency: { from: line.from, to: line.to }
+	};
+};
+
+/** Names the rule of thumb's edges beside a band from which they differ by more than 5 %. */
+const thumbEdgesOf = (
+	design: Design,
+	source: Source,
+	ranges: readonly GuardedRange[]
+): NonNullable<Finding['thumbEdges']> => {
+	const inductances = inductanceRange(source);
+	if (inductances === null) return [];
+	const differs = (thumb: number, exact: number): boolean => Math.abs(thumb / exact - 1) > THUMB_DIFFERENCE;
+	return ranges.flatMap(({ line, guard, worst }) => {
+		if (line.from <= highestCorner(design)) return [];
+		const thumb = thumbRange(design, line, inductances);
+		const order = line.harmonic === 1 ? '' : `, n = ${String(line.harmonic)}`;
+		return [
+			{ thumb: thumb.from / guard ** 2, exact: worst.from / guard ** 2 },
+			{ thumb: thumb.to * guard ** 2, exact: worst.to * guard ** 2 }
+		]
+			.filter((edge) => Number.isFinite(edge.thumb) && differs(edge.thumb, edge.exact))
+			.map((edge) => ({ capacitance: edge.thumb, label: `rule of thumb${order}` }));
+	});
+};
+
+const measuredParts = ({ inductor, capacitor }: Design): readonly string[] =>
+	inductor.curve === undefined && capacitor.curve === undefined
+		? []
+		: ['A measured curve stands for its part as it is, without tolerance.'];
+
+const exact = (design: Design, rule: ResonanceGuardRule, source: Source): Finding => {
+	const [filter, model] = [filterOf(design), sourceModel(design, source)];
+	const lines = guardedLines(design, rule);
+	const gap = lines
+		.map((line) => uncovered([...partCurves(filter), ...sourceCurves(model)], line))
+		.find((reason) => reason !== null);
+	if (gap !== undefined && gap !== null) return notEvaluated(rule, RESONANCE_GUARD, gap);
+	const ranges = lines.flatMap((line): GuardedRange[] => {
+		const worst = worstRange(boxOf(design, filter, model, line));
+		return worst === null ? [] : [{ line, guard: guardOf(rule, line), worst }];
+	});
+	const bands = ranges.map((range) => bandOf(source, range));
+	return evaluated(rule, RESONANCE_GUARD, {
+		bands,
+		formula: formulaOf(ranges, bands),
+		assumptions: ['The whole network with real parts; Cx itself ideal.', ...measuredParts(design)],
+		thumbEdges: thumbEdgesOf(design, source, ranges)
+	});
+};
+
 /**
  * Keeps Cx away from resonance at every line: (C0/k², k²·C0) united over ranges and tolerances.
  * @param design the worksheet's design
  * @param rule source, guard k for n = 1 and for n ≥ 2, method
- * @returns a finding with a band per line [F]
+ * @returns a finding with a band per line [F]; not-evaluated where the method does not reach or a curve has no data
  * @example resonanceGuard(design, { source: 'amn', guard: 2, method: 'approximate', … }).bands[0].to // 9.795e-8
  * Source: common practice.
  */
 export function resonanceGuard(design: Design, rule: ResonanceGuardRule): Finding {
 	const source = sourceOf(design, rule.source);
-	return rule.method === 'approximate'
-		? approximate(design, rule, source)
-		: notEvaluated(rule, RESONANCE_GUARD, 'The exact method is not calculated.');
+	return rule.method === 'approximate' ? approximate(design, rule, source) : exact(design, rule, source);
 }

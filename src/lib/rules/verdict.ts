@@ -1,7 +1,8 @@
 /** What the rules say of the design's own choice. */
 import type { Design } from '$lib/design/design';
 import { relativelyEqual, type Interval } from '$lib/quantity/interval';
-import type { Benefit, Finding, Verdict, Window } from './finding';
+import type { Gains } from './benefit';
+import type { Finding, Verdict, Window } from './finding';
 import { breaksRule, toleranceInterval, warningsOf } from './warnings';
 import { closesWindows } from './windows';
 
@@ -10,9 +11,12 @@ const atMost = (a: number, b: number): boolean => a <= b || relativelyEqual(a, b
 const holds = (window: Window, { from, to }: Interval): boolean =>
 	atMost(window.from, from) && atMost(to, window.to);
 
+const marginOf = (upper: number | null, lower: number | null): number | null =>
+	upper === null || lower === null ? null : upper / lower - 1;
+
 const margins = (nominal: number, window: Window | undefined): Pick<Verdict, 'marginFrom' | 'marginTo'> => ({
-	marginFrom: window?.nominalFrom == null ? null : nominal / window.nominalFrom - 1,
-	marginTo: window?.nominalTo == null ? null : window.nominalTo / nominal - 1
+	marginFrom: marginOf(nominal, window?.nominalFrom ?? null),
+	marginTo: marginOf(window?.nominalTo ?? null, nominal)
 });
 
 /**
@@ -21,16 +25,16 @@ const margins = (nominal: number, window: Window | undefined): Pick<Verdict, 'ma
  * @param design the worksheet's design
  * @param windows what the rules leave [F]
  * @param findings what the rules answered
- * @param benefits gains of the choice
+ * @param gains gains of the choice
  * @returns the verdict, or null without a choice
- * @example verdictOf(chargerAuxiliary, windows, findings, benefits)?.state // 'allowed'
+ * @example verdictOf(chargerAuxiliary, windows, findings, gains)?.state // 'allowed'
  * Source: common practice.
  */
 export function verdictOf(
 	design: Design,
 	windows: readonly Window[],
 	findings: readonly Finding[],
-	benefits: readonly Benefit[]
+	gains: Gains
 ): Verdict | null {
 	const nominal = design.choice.capacitance_F;
 	if (nominal === null) return null;
@@ -42,7 +46,7 @@ export function verdictOf(
 		breaks: findings
 			.filter((finding) => closesWindows(finding) && breaksRule(finding, interval))
 			.map(({ rule }) => rule),
-		warnings: warningsOf(interval, benefits, findings, design.sources),
+		warnings: warningsOf(interval, gains, findings, design.sources),
 		...margins(nominal, home)
 	};
 }

@@ -1,6 +1,7 @@
 /** What a value does that no closing rule forbids, but that whoever picks it must know. */
 import type { Source, Tolerance } from '$lib/design/design';
 import { relativelyEqual, type Interval } from '$lib/quantity/interval';
+import type { Gains } from './benefit';
 import type { Benefit, Finding } from './finding';
 import { closesWindows } from './windows';
 import { plain, worded } from './wording';
@@ -42,22 +43,26 @@ const negativeGain = (benefit: Benefit, sources: readonly Source[]): string => {
 
 /**
  * Lists the warnings of a nominal value: advisory rules and rules put aside that it breaks, by id; and each
- * line that it makes worse, in words.
+ * line that it makes worse or of which a curve knows nothing, in words.
  * @param interval where the real capacitance lies [F]
- * @param benefits gains of the nominal value
+ * @param gains gains of the nominal value
  * @param findings what the rules answered
  * @param sources the design's sources, for their labels
  * @returns rule ids and words
- * @example warningsOf(interval, benefits, findings, sources) // ['−13.7 dB at 420 kHz on Test network']
+ * @example warningsOf(interval, gains, findings, sources) // ['−13.7 dB at 420 kHz on Test network']
  * Source: common practice.
  */
 export function warningsOf(
 	interval: Interval,
-	benefits: readonly Benefit[],
+	{ benefits, gaps }: Gains,
 	findings: readonly Finding[],
 	sources: readonly Source[]
 ): string[] {
 	const broken = findings.filter((finding) => !closesWindows(finding) && breaksRule(finding, interval));
 	const negative = benefits.filter(({ gain_dB }) => gain_dB < 0);
-	return [...broken.map(({ rule }) => rule), ...negative.map((benefit) => negativeGain(benefit, sources))];
+	return [
+		...broken.map(({ rule }) => rule),
+		...negative.map((benefit) => negativeGain(benefit, sources)),
+		...gaps
+	];
 }
