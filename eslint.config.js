@@ -124,6 +124,7 @@ export default defineConfig(
 			'no-warning-comments': ['error', { terms: ['todo', 'fixme', 'xxx', 'hack'], location: 'anywhere' }],
 			'no-restricted-syntax': ['error', noSkippedTests],
 			'@typescript-eslint/consistent-type-imports': 'error',
+			'@typescript-eslint/no-unused-vars': ['error', { ignoreRestSiblings: true, argsIgnorePattern: '^_' }],
 			'svelte/no-navigation-without-resolve': 'off' // the application is always served at the root
 		}
 	},
