@@ -1,0 +1,80 @@
+/** Programs from Debian's packages: found, or installed where that is allowed. */
+import { accessSync, constants, existsSync, mkdirSync, writeFileSync } from 'node:fs';
+import { delimiter, join } from 'node:path';
+import { postgresBinaries } from './cluster.mjs';
+import { Halt, must } from './run.mjs';
+
+/** @param {string} name */
+function onPath(name) {
+	return (process.env.PATH ?? '').split(delimiter).some((folder) => {
+		try {
+			accessSync(join(folder, name), constants.X_OK);
+			return true;
+		} catch {
+			return false; // not in this folder: the search goes on
+		}
+	});
+}
+
+/** @param {string} name */
+const jar = (name) => () => existsSync(`/usr/share/java/${name}.jar`);
+/** @param {string} name */
+const program = (name) => () => onPath(name);
+
+/** @typedef {Readonly<Record<string, () => boolean>>} Packages package → whether what it brings is there */
+
+/** @type {Packages} */
+export const toServe = { postgresql: () => postgresBinaries() !== null };
+
+/** @type {Packages} */
+export const toTest = {
+	...toServe,
+	chromium: program('chromium'),
+	ngspice: program('ngspice'),
+	'default-jre-headless': program('java'),
+	'libpdfbox2-java': jar('preflight'),
+	'libfontbox2-java': jar('fontbox2'),
+	'libcommons-logging-java': jar('commons-logging'),
+	'libactivation-java': () => jar('javax.activation')() || jar('jakarta.activation')() || jar('activation')(),
+	'libjaxb-api-java': jar('jaxb-api'),
+	qpdf: program('qpdf'),
+	'poppler-utils': program('pdftotext'),
+	'librsvg2-bin': program('rsvg-convert'),
+	'mupdf-tools': program('mutool'),
+	ghostscript: program('gs'),
+	'zbar-tools': program('zbarimg')
+};
+
+/** @param {Packages} packages */
+const missingOf = (packages) => Object.keys(packages).filter((name) => !packages[name]?.());
+
+/** Debian would start a server of its own on the usual port; ours has its own data and port. */
+function keepMainClusterAway() {
+	const folder = '/etc/postgresql-common/createcluster.d';
+	if (existsSync('/etc/postgresql-common/createcluster.conf')) return;
+	mkdirSync(folder, { recursive: true });
+	writeFileSync(join(folder, 'herringbone.conf'), 'create_main_cluster = false\n');
+}
+
+/**
+ * Makes sure that the packages' programs are there.
+ *
+ * @param {Packages} packages
+ * @throws {Halt} naming what is missing, where it cannot be installed from here
+ */
+export async function ensurePackages(packages) {
+	const missing = missingOf(packages);
+	if (missing.length === 0) return;
+	const names = missing.join(' ');
+	if (process.getuid?.() !== 0 || !onPath('apt-get')) {
+		throw new Halt(`Missing: ${names}. Install with: sudo apt-get install ${names}`);
+	}
+	console.log(`Installing ${names} …`);
+	if (missing.includes('postgresql')) keepMainClusterAway();
+	const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive' };
+	await must('read the list of packages', 'apt-get', ['update', '-qq'], { env });
+	const install = ['install', '-y', '-qq', '--no-install-recommends', ...missing];
+	await must(`install ${names}`, 'apt-get', install, { env });
+	const still = missingOf(packages);
+	if (still.length > 0) throw new Halt(`Installed, but still not found: ${still.join(' ')}.`);
+}
