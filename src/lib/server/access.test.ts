@@ -57,7 +57,7 @@ describe('isCrossSite', () => {
 			'a script of another site'
 		],
 		['DELETE', '/api/v1/session', 'https://elsewhere.test', '', true, 'whatever the method']
-	])('%s %s from %s as "%s" → %s (%s)', (method, path, origin, type, expected) => {
+	])('%s %s from %s as "%s" → %s (%s)', (method, path, origin, type, expected, _why) => {
 		const headers = new Headers();
 		if (origin !== null) headers.set('origin', origin);
 		if (type) headers.set('content-type', type);
