@@ -114,7 +114,18 @@ const LETTERS: Readonly<Record<Coded, Readonly<Record<string, string>>>> = {
 	resistance: { m: 'm', '': 'R', k: 'K', M: 'M', G: 'G' }
 };
 
-const isCoded = (quantity: Quantity): quantity is Coded => Object.hasOwn(LETTERS, quantity);
+const lettersOf = (quantity: Quantity): Readonly<Record<string, string>> => {
+	if (quantity === 'capacitance' || quantity === 'inductance' || quantity === 'resistance')
+		return LETTERS[quantity];
+	throw new RangeError(`there is no letter code for a ${quantity}`);
+};
+
+/** The largest prefix under the mantissa; a tenth of an ohm is coded R1, though else a digit stands before the letter. */
+const chooseCodePrefix = (quantity: Quantity, point: number): string => {
+	const prefixes = Object.keys(lettersOf(quantity));
+	const reach = quantity === 'resistance' && point === 0 ? 1 : point;
+	return prefixes.filter((prefix) => (EXPONENT[prefix] ?? 0) < reach).at(-1) ?? prefixes[0] ?? '';
+};
 
 /**
  * Writes a value in the letter code of parts, where a letter stands for the decimal mark.
@@ -126,19 +137,11 @@ const isCoded = (quantity: Quantity): quantity is Coded => Object.hasOwn(LETTERS
  * Source: IEC 60062:2016, decimal-mark letters (capacitors recalled).
  */
 export function formatRkm(value: number, quantity: Quantity): string {
-	if (!isCoded(quantity)) throw new RangeError(`there is no letter code for a ${quantity}`);
 	if (!(value > 0) || !Number.isFinite(value)) {
 		throw new RangeError(`value must be > 0 and finite, got ${String(value)}`);
 	}
-	const decimal = toDecimal(value, {}, false);
-	const letters = LETTERS[quantity];
-	// A tenth of an ohm is coded R1, though every other value keeps a digit before its letter.
-	const point = quantity === 'resistance' && decimal.point === 0 ? 1 : decimal.point;
-	const prefixes = Object.keys(letters).filter((prefix) => (EXPONENT[prefix] ?? 0) < point);
-	const prefix = prefixes.at(-1) ?? Object.keys(letters)[0] ?? '';
-	const [whole = '', places = ''] = expand({
-		digits: decimal.digits,
-		point: decimal.point - (EXPONENT[prefix] ?? 0)
-	}).split('.');
-	return `${whole === '0' ? '' : whole}${letters[prefix] ?? ''}${places}`;
+	const { digits, point } = toDecimal(value, {}, false);
+	const prefix = chooseCodePrefix(quantity, point);
+	const [whole = '', places = ''] = expand({ digits, point: point - (EXPONENT[prefix] ?? 0) }).split('.');
+	return `${whole === '0' ? '' : whole}${lettersOf(quantity)[prefix] ?? ''}${places}`;
 }

@@ -26,7 +26,7 @@ export interface ParseOptions {
 const LONGEST = 64;
 
 /** Letters of the part code and the prefix each stands for. */
-const CODE_LETTERS: Readonly<Partial<Record<Quantity, Readonly<Record<string, string>>>>> = {
+const CODE_LETTERS: Readonly<Partial<Record<Quantity, Readonly<Partial<Record<string, string>>>>>> = {
 	capacitance: { p: 'p', n: 'n', u: 'µ', µ: 'µ', m: 'm', F: '' },
 	inductance: { p: 'p', n: 'n', u: 'µ', µ: 'µ', m: 'm', H: '' },
 	resistance: { R: '', k: 'k', K: 'k', M: 'M', G: 'G', m: 'm', L: 'm' }
@@ -57,6 +57,8 @@ const normalise = (text: string): string =>
 			return head + tail.replace(/\D/g, '');
 		});
 
+const exponentOf = (prefix: string): number => EXPONENT[prefix] ?? 0;
+
 /** A decimal string is read once, so that 2.2 µF is the double nearest to 2.2e-6. */
 const readNumber = (digits: string, exponent: number): number => {
 	const [mantissa = '', own = '0'] = digits.replace(',', '.').toLowerCase().split('e');
@@ -71,22 +73,34 @@ const echo = (value: number, quantity: Quantity): string => {
 	return quantity === 'capacitance' && reading.endsWith('mF') ? `${reading} (millifarad)` : reading;
 };
 
+const CODE =
+	/^(?<sign>-?)(?<whole>\d*)(?<letter>[A-Za-zµ])(?<places>\d*)(?<tolerance>[BCDFGJKMN]?)(?: ?(?<unit>F|H|Ω|ohm))?$/;
+
+/** In 4n7F the letter is the unit far more often than a tolerance of one per cent. */
+const echoTolerance = (letter: string, quantity: Quantity): string =>
+	letter === '' || letter === UNIT[quantity] ? '' : ` ±${TOLERANCE[letter] ?? ''}\u00a0%`;
+
+interface Code {
+	readonly number: string;
+	readonly letter: string;
+	readonly tolerance: string;
+	readonly unit: string;
+}
+
+const takeCode = (text: string): Code | null => {
+	const groups = CODE.exec(text)?.groups;
+	if (groups === undefined) return null;
+	const { sign = '', whole = '', letter = '', places = '', tolerance = '', unit = '' } = groups;
+	return whole + places === '' ? null : { number: `${sign}0${whole}.${places}0`, letter, tolerance, unit };
+};
+
 const readCode = (text: string, quantity: Quantity): Parsed | null => {
-	const letters = CODE_LETTERS[quantity];
-	const match = /^(-?\d*)([A-Za-zµ])(\d*)([BCDFGJKMN]?)(?: ?(F|H|Ω|ohm))?$/.exec(text);
-	if (letters === undefined || match === null) return null;
-	const [, whole = '', letter = '', places = '', tolerance = '', unit] = match;
-	const prefix = letters[letter];
-	if (prefix === undefined || whole.replace('-', '') + places === '') return null;
-	if (unit !== undefined && !UNITS[quantity].includes(unit)) return null;
-	const value = readNumber(
-		`${whole === '' || whole === '-' ? `${whole}0` : whole}.${places}0`,
-		EXPONENT[prefix] ?? 0
-	);
-	// In 4n7F the letter is the unit far more often than a tolerance of one per cent.
-	const percent = tolerance === UNIT[quantity] ? undefined : TOLERANCE[tolerance];
-	const tail = percent === undefined ? '' : ` ±${percent}\u00a0%`;
-	return { ok: true, value, reading: echo(value, quantity) + tail };
+	const code = takeCode(text);
+	const prefix = code === null ? undefined : CODE_LETTERS[quantity]?.[code.letter];
+	if (code === null || prefix === undefined) return null;
+	if (code.unit !== '' && !UNITS[quantity].includes(code.unit)) return null;
+	const value = readNumber(code.number, exponentOf(prefix));
+	return { ok: true, value, reading: echo(value, quantity) + echoTolerance(code.tolerance, quantity) };
 };
 
 /** "1,000" is one in some countries and a thousand in others; "0,125" and "1.125 µF" are not in doubt. */
@@ -96,22 +110,44 @@ const isAmbiguous = (number: string, hasUnit: boolean, quantity: Quantity): bool
 	return new RegExp(`^-?[1-9]\\d{0,2}${mark}\\d{3}(e|$)`, 'i').test(number);
 };
 
-const readPlain = (text: string, quantity: Quantity): Parsed => {
-	const match = /^(-?\d+(?:[.,]\d+)?(?:[eE][+-]?\d+)?)[ \u00a0\u202f]?(.*)$/.exec(text);
-	if (match === null) return refuseText(text, quantity);
-	const [, number = '', rest = ''] = match;
+interface Plain {
+	readonly number: string;
+	readonly symbol: string;
+}
+
+const PLAIN = /^(?<number>-?\d+(?:[.,]\d+)?(?:[eE][+-]?\d+)?)[ \u00a0\u202f]?(?<rest>.*)$/;
+
+const takePlain = (text: string, quantity: Quantity): Plain | Refusal => {
+	const groups = PLAIN.exec(text)?.groups;
+	if (groups === undefined) return refuseText(text, quantity);
+	const { number = '', rest = '' } = groups;
 	const symbol = rest.trim();
 	if (/^[\d.,]/.test(symbol)) {
 		return refuse(`“${text}” holds more than one number: write one, such as ${EXAMPLE[quantity]}.`);
 	}
 	if (isAmbiguous(number, symbol !== '', quantity)) return refuseAmbiguous(number, symbol, quantity);
 	if (symbol === '' && quantity !== 'number') return refuseBare(number, quantity);
+	return { number, symbol };
+};
+
+const readPlain = (text: string, quantity: Quantity): Parsed => {
+	const plain = takePlain(text, quantity);
+	if ('ok' in plain) return plain;
+	const { number, symbol } = plain;
 	const prefix = splitUnit(symbol, quantity)?.prefix;
 	if (prefix === undefined) return refuseSymbol(symbol, quantity);
-	const value = readNumber(number, (EXPONENT[prefix] ?? 0) + unitExponent(quantity));
+	const value = readNumber(number, exponentOf(prefix) + unitExponent(quantity));
 	if (!Number.isFinite(value)) return refuseValue('is too large', quantity);
 	if (value === 0 && /[1-9]/.test(number.replace(/e.*/i, ''))) return refuseValue('is too small', quantity);
 	return { ok: true, value, reading: echo(value, quantity) };
+};
+
+/** A range of the field may be narrower; this only tells what no field of this kind takes. */
+const checkSign = (parsed: Parsed, quantity: Quantity, options: ParseOptions): Parsed => {
+	const { zero = false, negative = false } = options;
+	if (!parsed.ok || negative) return parsed;
+	if (parsed.value < 0) return refuseValue('must not be below zero', quantity);
+	return parsed.value === 0 && !zero ? refuseValue('must be above zero', quantity) : parsed;
 };
 
 /**
@@ -130,14 +166,7 @@ export function parseQuantity(text: string, quantity: Quantity, options: ParseOp
 	}
 	const clean = normalise(text);
 	if (clean === '') return refuse(`Enter a value, such as ${EXAMPLE[quantity]}.`);
-	const parsed = readCode(clean, quantity) ?? readPlain(clean, quantity);
-	if (!parsed.ok) return parsed;
-	if (parsed.value < 0 && options.negative !== true) {
-		return refuseValue('must not be below zero', quantity);
-	}
-	if (parsed.value === 0 && options.zero !== true && options.negative !== true) {
-		return refuseValue('must be above zero', quantity);
-	}
+	const parsed = checkSign(readCode(clean, quantity) ?? readPlain(clean, quantity), quantity, options);
 	// −0 would print as 0 but compare as another key.
-	return parsed.value === 0 ? { ...parsed, value: 0 } : parsed;
+	return parsed.ok && parsed.value === 0 ? { ...parsed, value: 0 } : parsed;
 }

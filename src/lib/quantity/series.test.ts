@@ -53,7 +53,7 @@ describe('nearestPreferred', () => {
 		[9.9, 'E6', 10],
 		[8.1, 'E6', 6.8],
 		[8.3, 'E6', 10],
-		[4.7, 'E96', 4.75 / 4.7 < 4.7 / 4.64 ? 4.75 : 4.64],
+		[4.7, 'E96', 4.75],
 		[1e-12, 'E3', 1e-12]
 	] as [number, SeriesName, number][])('of %d in %s', (value, name, expected) => {
 		expect(nearestPreferred(value, name)).toBe(expected);
