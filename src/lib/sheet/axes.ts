@@ -1,0 +1,88 @@
+/** The plot's border, ticks and numerals; frequencies stand above where the benefit pane takes the foot. */
+import { formatQuantity } from '$lib/quantity/format';
+import type { Item } from '$lib/scene/scene';
+import { capOf, penOf, type Board } from './board';
+import { lettered, rectangle, ruled } from './pen';
+import { xOf, yOf } from './plot';
+
+/** Outside the border, at k = 1 [mm]. */
+const TICK = 1.2;
+const NUMERAL_GAP = 0.7;
+
+/**
+ * Lists the powers of ten from one value to another, both included.
+ * @param from power of ten
+ * @param to power of ten
+ * @returns rising
+ * @example powersOfTen(1e3, 1e5) // [1000, 10000, 100000]
+ * Source: identity.
+ */
+export function powersOfTen(from: number, to: number): number[] {
+	const first = Math.round(Math.log10(from));
+	const last = Math.round(Math.log10(to));
+	return Array.from({ length: last - first + 1 }, (_, index) => Number(`1e${String(first + index)}`));
+}
+
+const frequencyNumerals = (board: Board): Item[] => {
+	const { plot, pane, decimalMark, ink } = board.input;
+	const { k } = board;
+	const cap = capOf(board);
+	const above = pane !== null;
+	const border = above ? plot.y : plot.y + plot.height;
+	const away = (above ? -1 : 1) * TICK * k;
+	const baseline = above ? border - (TICK + NUMERAL_GAP) * k : border + (TICK + NUMERAL_GAP) * k + cap;
+	const values = powersOfTen(plot.frequencyFrom, plot.frequencyTo);
+	const ticks = values.flatMap((value) => [xOf(plot, value), border, xOf(plot, value), border + away]);
+	const numerals = values.map((value) =>
+		lettered(formatQuantity(value, 'frequency', { decimalMark }), xOf(plot, value), baseline, {
+			cap,
+			fill: ink.ink,
+			anchor: 'middle'
+		})
+	);
+	const symbol = lettered('f', plot.x + plot.width - plot.decade / 2, baseline, {
+		cap,
+		face: 'bold',
+		fill: ink.ink,
+		anchor: 'middle'
+	});
+	return [ruled(ticks, penOf(board, 'tick')), ...numerals, symbol];
+};
+
+const impedanceNumerals = (board: Board): Item[] => {
+	const { plot, decimalMark, ink } = board.input;
+	const { k } = board;
+	const cap = capOf(board);
+	const right = plot.x - (TICK + NUMERAL_GAP) * k;
+	const values = powersOfTen(plot.impedanceFrom, plot.impedanceTo);
+	const ticks = values.flatMap((value) => [plot.x - TICK * k, yOf(plot, value), plot.x, yOf(plot, value)]);
+	const numerals = values.map((value) =>
+		lettered(formatQuantity(value, 'resistance', { decimalMark }), right, yOf(plot, value) + cap / 2, {
+			cap,
+			fill: ink.ink,
+			anchor: 'end'
+		})
+	);
+	const symbol = lettered('|Z|', right, plot.y + plot.decade / 2 + cap / 2, {
+		cap,
+		face: 'bold',
+		fill: ink.ink,
+		anchor: 'end'
+	});
+	return [ruled(ticks, penOf(board, 'tick')), ...numerals, symbol];
+};
+
+/**
+ * Draws border, ticks, numerals and the two symbols.
+ * @param board the chart
+ * @returns items outside the plot, and its border
+ * @example axisItems(board).length
+ * Source: sheet design.
+ */
+export function axisItems(board: Board): Item[] {
+	return [
+		...frequencyNumerals(board),
+		...impedanceNumerals(board),
+		rectangle(board.input.plot, { stroke: penOf(board, 'border') })
+	];
+}
