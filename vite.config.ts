@@ -27,6 +27,7 @@ export default defineConfig({
 					name: 'served',
 					environment: 'node',
 					include: ['tests/database/**/*.test.ts', 'tests/browser/**/*.test.ts', 'tests/faults/**/*.test.ts'],
+					globalSetup: 'tests/served.ts',
 					fileParallelism: false,
 					testTimeout: 120_000,
 					hookTimeout: 180_000
