@@ -7,27 +7,34 @@
  *   migrate   brings the database up to date and ends
  *   tools     installs what the tests need
  */
-import { ensureBuild, ensureNodePackages, clusterFolder, takeLock } from './local/checkout.mjs';
+import { clusterFolder, ensureBuild, ensureNodePackages, startLock } from './local/checkout.mjs';
 import { startCluster } from './local/cluster.mjs';
 import { ensurePackages, toServe, toTest } from './local/debian.mjs';
+import { takeLock } from './local/lock.mjs';
 import { createDatabase, migrateDatabase } from './local/migrate.mjs';
 import { Halt, endWithChildren } from './local/run.mjs';
 import { builtServer, developmentServer, ensurePortFree, settings, startServer } from './local/serve.mjs';
 
 const ownDatabase = !process.env.DATABASE_URL;
 
-/** @param {() => Promise<void>} work */
+/** Lets one start of this checkout at a time go on. @param {() => Promise<void>} work */
 async function alone(work) {
-	process.once('exit', takeLock());
+	const outcome = await takeLock(startLock);
+	if ('heldBy' in outcome) {
+		throw new Halt(
+			`This checkout is already being started or served, by process ${outcome.heldBy}. Stop that first.`
+		);
+	}
+	process.once('exit', outcome.release);
 	await work();
 }
 
 async function prepare() {
 	endWithChildren();
-	await ensurePortFree(settings(process.env));
+	const chosen = settings(process.env);
 	await alone(async () => {
-		if (ownDatabase) await ensurePackages(toServe);
-		await ensureNodePackages();
+		await ensurePortFree(chosen);
+		await Promise.all([ownDatabase && ensurePackages(toServe), ensureNodePackages()]);
 		await ensureBuild();
 	});
 }
@@ -84,8 +91,7 @@ async function serve(command) {
 }
 
 async function development() {
-	await ensureNodePackages();
-	if (ownDatabase) await ensurePackages(toServe);
+	await Promise.all([ownDatabase && ensurePackages(toServe), ensureNodePackages()]);
 	await serve(developmentServer);
 }
 
@@ -103,8 +109,7 @@ async function migrate() {
 
 async function tools() {
 	endWithChildren();
-	await ensurePackages(toTest);
-	await ensureNodePackages();
+	await Promise.all([ensurePackages(toTest), ensureNodePackages()]);
 }
 
 /** @type {Readonly<Record<string, () => Promise<void>>>} */
@@ -118,5 +123,6 @@ try {
 } catch (error) {
 	if (!(error instanceof Halt)) throw error;
 	console.error(`\n${error.message}\n`);
+	if (process.argv[2] === 'tools') console.log('0 passed, 1 failed');
 	process.exit(1);
 }

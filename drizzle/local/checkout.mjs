@@ -1,8 +1,9 @@
 /** What belongs to this checkout: its packages, its build, its database's folder and its lock. */
 import { createHash, randomUUID } from 'node:crypto';
-import { existsSync, linkSync, mkdirSync, readFileSync, readdirSync, rmSync, writeFileSync } from 'node:fs';
+import { existsSync, mkdirSync, readFileSync, readdirSync, rmSync, writeFileSync } from 'node:fs';
 import { join, relative } from 'node:path';
-import { Halt, must } from './run.mjs';
+import { waitForLock } from './lock.mjs';
+import { must } from './run.mjs';
 
 export const root = join(import.meta.dirname, '../..');
 const local = join(root, '.local');
@@ -57,6 +58,15 @@ function sourceHash() {
 
 /** Builds the application where its sources are not those of the last build. */
 export async function ensureBuild() {
+	const release = await waitForLock(join(local, 'build.lock'));
+	try {
+		await build();
+	} finally {
+		release();
+	}
+}
+
+async function build() {
 	const stamp = join(root, 'build/source-hash');
 	const hash = sourceHash();
 	if (existsSync(stamp) && readFileSync(stamp, 'utf8') === hash) return;
@@ -69,79 +79,8 @@ export async function ensureBuild() {
 	writeFileSync(stamp, hash);
 }
 
-/** @param {number | undefined} pid */
-function alive(pid) {
-	if (!pid) return false;
-	try {
-		process.kill(pid, 0);
-		return true;
-	} catch (error) {
-		return error instanceof Error && 'code' in error && error.code === 'EPERM';
-	}
-}
-
-/** @param {number} pid @returns {string} what tells a process from a later one that got its number */
-function birth(pid) {
-	const file = `/proc/${pid}/stat`;
-	return existsSync(file) ? (readFileSync(file, 'utf8').split(') ').pop()?.split(' ')[19] ?? '') : '';
-}
-
-const lockFile = join(local, 'start.lock');
-
-/** @returns {{ pid?: number, born?: string, server?: number, serverBorn?: string }} */
-function lockHolder() {
-	try {
-		return readJson(lockFile);
-	} catch (error) {
-		if (error instanceof SyntaxError || !existsSync(lockFile)) return {}; // cut off while it was written
-		throw error;
-	}
-}
-
-/** @param {number | undefined} pid @param {string | undefined} born */
-const stillThat = (pid, born) => pid !== undefined && alive(pid) && birth(pid) === born;
-
-/** Ends the server that a start which was killed left behind: it would hold the port. */
-function endLeftover({ server, serverBorn } = lockHolder()) {
-	if (server !== undefined && stillThat(server, serverBorn)) process.kill(server, 'SIGKILL');
-}
-
-/**
- * Lets one start of this checkout at a time go on; the lock of a process that is gone counts for nothing.
- *
- * @returns {() => void} gives the lock back
- */
-export function takeLock() {
-	mkdirSync(local, { recursive: true });
-	const mine = `${lockFile}.${process.pid}`;
-	writeFileSync(mine, JSON.stringify({ pid: process.pid, born: birth(process.pid) }));
-	for (let tries = 0; tries < 2; tries += 1) {
-		try {
-			// A link appears whole or not at all, so nobody reads half a lock.
-			linkSync(mine, lockFile);
-			rmSync(mine);
-			return () => rmSync(lockFile, { force: true });
-		} catch (error) {
-			if (!(error instanceof Error && 'code' in error && error.code === 'EEXIST')) throw error;
-		}
-		const holder = lockHolder();
-		if (stillThat(holder.pid, holder.born)) {
-			rmSync(mine);
-			throw new Halt(
-				`This checkout is already being started or served, by process ${holder.pid}. Stop that first.`
-			);
-		}
-		endLeftover(holder);
-		rmSync(lockFile, { force: true });
-	}
-	throw new Halt('Another start of this checkout came first.');
-}
-
-/** Notes the server's process in the lock. @param {number} server */
-export function noteServer(server) {
-	const entry = { pid: process.pid, born: birth(process.pid), server, serverBorn: birth(server) };
-	writeFileSync(lockFile, JSON.stringify(entry));
-}
+/** Held while this checkout is started or served. */
+export const startLock = join(local, 'start.lock');
 
 const shelf = '/var/lib/herringbone';
 

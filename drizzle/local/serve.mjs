@@ -2,7 +2,8 @@
 import { spawn } from 'node:child_process';
 import { createServer } from 'node:net';
 import { join } from 'node:path';
-import { noteServer, root } from './checkout.mjs';
+import { root, startLock } from './checkout.mjs';
+import { noteServer } from './lock.mjs';
 import { Halt, pause } from './run.mjs';
 
 /** @param {string} host @param {number} port */
@@ -83,7 +84,7 @@ export async function startServer({ port, host, demo, here, origin }, databaseUr
 		child.once('error', () => resolve(1));
 		child.once('exit', (code, signal) => resolve(signal ? 1 : (code ?? 1)));
 	});
-	if (child.pid) noteServer(child.pid);
+	if (child.pid) noteServer(startLock, child.pid);
 	let over = false;
 	void ended.then(() => (over = true));
 	const ready = async () => {
