@@ -92,7 +92,7 @@ export function toSvg(scene: Scene, options: { readonly fontCss?: string } = {})
 		`<desc id="sheet-description">${escapeXml(scene.description)}</desc>\n` +
 		`<metadata>${metadata}</metadata>\n` +
 		(options.fontCss === undefined ? '' : `<style>${escapeXml(options.fontCss)}</style>\n`) +
-		`<path d="M0 0L${width} 0L${width} ${height}L0 ${height}Z" fill="#ffffff"/>\n` +
+		`<rect width="${width}" height="${height}" fill="#ffffff"/>\n` +
 		`${scene.items.map(element).join('')}</svg>\n`
 	);
 }
