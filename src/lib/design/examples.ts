@@ -10,7 +10,13 @@ export const chargerAuxiliary: Design = {
 	title: 'Charger auxiliary supply',
 	supply: { kind: 'ac', voltage_V: 230, voltageMax_V: 253, frequency_Hz: 50, frequencyMax_Hz: 50 },
 	switching: [
-		{ id: 'flyback', label: 'Flyback, dithered', frequencyMin_Hz: 126e3, frequencyMax_Hz: 138e3, harmonics: 5 }
+		{
+			id: 'flyback',
+			label: 'Flyback, dithered',
+			frequencyMin_Hz: 126e3,
+			frequencyMax_Hz: 138e3,
+			harmonics: 5
+		}
 	],
 	inductor: { inductance_H: 220e-6, toleranceMinus: 0.15, tolerancePlus: 0.15 },
 	capacitor: { capacitance_F: 2.2e-6, ...tenPercent },
