@@ -30,7 +30,7 @@ export default defineConfig({
 					globalSetup: 'tests/served.ts',
 					fileParallelism: false,
 					testTimeout: 120_000,
-					hookTimeout: 180_000
+					hookTimeout: 300_000
 				}
 			}
 		]
