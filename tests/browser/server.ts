@@ -54,6 +54,8 @@ export async function startApplication(options: ApplicationOptions = {}): Promis
 			...options.env
 		}
 	});
+	// A test that runs out of time never gets to stop().
+	process.once('exit', () => child.kill('SIGKILL'));
 	let output = '';
 	for (const stream of [child.stdout, child.stderr]) {
 		stream.setEncoding('utf8').on('data', (text: string) => (output += text));
