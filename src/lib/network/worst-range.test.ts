@@ -75,20 +75,22 @@ const inside = (intervals: readonly Interval[], value: number): boolean =>
 const steps = [0, 0.07, 0.2, 0.35, 0.5, 0.65, 0.8, 0.93, 1];
 const grid = steps.flatMap((a) => steps.flatMap((b) => steps.map((c) => [a, b, c])));
 
+const moves = [0, 1, 2, 3].flatMap((index) => [-1, 1].map((sign) => ({ index, sign })));
+
 /** Nears an edge from the best sample by ever smaller steps in all four directions. */
 const climbed = (value: (shares: readonly number[]) => number, start: readonly number[]): number => {
-	let place = [...start];
+	let place = start;
 	let best = value(place);
-	for (let step = 0.1; step > 1e-12; step /= 2)
-		for (let round = 0, moved = true; moved && round < 60; round += 1) {
-			moved = false;
-			for (const index of [0, 1, 2, 3])
-				for (const by of [-step, step]) {
-					const next = place.with(index, Math.min(1, Math.max(0, (place[index] ?? 0) + by)));
-					const there = value(next);
-					if (there > best) [best, place, moved] = [there, next, true];
-				}
+	let step = 0.1;
+	while (step > 1e-12) {
+		const before = best;
+		for (const { index, sign } of moves) {
+			const next = place.with(index, Math.min(1, Math.max(0, (place[index] ?? 0) + sign * step)));
+			const there = value(next);
+			if (there > best) [best, place] = [there, next];
 		}
+		if (best === before) step /= 2;
+	}
 	return best;
 };
 
