@@ -9,7 +9,12 @@ export default defineConfig({
 		projects: [
 			{
 				extends: true,
-				test: { name: 'unit', environment: 'node', include: ['src/**/*.test.ts', 'tests/house.test.ts'] }
+				test: {
+					name: 'unit',
+					environment: 'node',
+					include: ['src/**/*.test.ts', 'tests/house.test.ts'],
+					testTimeout: 60_000
+				}
 			},
 			{
 				extends: true,

@@ -2,7 +2,7 @@
 import { readdirSync, readFileSync } from 'node:fs';
 import { join, relative } from 'node:path';
 import { ESLint } from 'eslint';
-import { describe, expect, it } from 'vitest';
+import { beforeAll, describe, expect, it } from 'vitest';
 import manifest from '../package.json';
 import * as access from '../src/lib/server/access';
 import { handlersOf, withoutDocstring } from './handlers';
@@ -149,6 +149,9 @@ describe('lint', () => {
 		const [result] = await eslint.lintText(code, { filePath: join(root, file) });
 		return (result?.messages ?? []).map((message) => message.ruleId);
 	}
+
+	// The first text loads the whole configuration.
+	beforeAll(() => complaints('src/lib/scene/sample.ts', ''), 60_000);
 
 	it.each([
 		['quantity', "import { a } from '$lib/network/complex';"],
