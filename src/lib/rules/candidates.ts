@@ -4,7 +4,8 @@ import { relativelyEqual } from '$lib/quantity/interval';
 import { coarsestSeries, preferredValues, SERIES_NAMES } from '$lib/quantity/series';
 import type { Gains } from './benefit';
 import type { Benefit, Candidate, Finding, Window } from './finding';
-import { toleranceInterval, warningsOf } from './warnings';
+import { toleranceInterval } from './tolerance';
+import { warningsOf } from './warnings';
 import { closesWindows } from './windows';
 
 /** Values outside are no line-side capacitors [F]. */

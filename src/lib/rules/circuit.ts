@@ -4,6 +4,7 @@ import { covers, impedanceCurve, type ImpedanceCurve } from '$lib/network/curve'
 import type { CapacitorPart, Filter, InductorPart } from '$lib/network/filter';
 import type { SourceModel } from '$lib/network/source';
 import type { Interval } from '$lib/quantity/interval';
+import { toleranceInterval } from './tolerance';
 import { wordedRange } from './wording';
 
 const curveOf = (design: Pick<Design, 'curves'>, id: string): ImpedanceCurve => {
@@ -118,4 +119,38 @@ export function uncovered(curves: readonly ImpedanceCurve[], range: Interval): s
 	if (short === undefined) return null;
 	const measured = wordedRange(short.first.frequency, short.last.frequency, 'frequency');
 	return `A measured curve covers ${measured} and not ${wordedRange(range.from, range.to, 'frequency')}: measure further, or leave the curve out.`;
+}
+
+/**
+ * Says of the first line that needs more than a curve covers.
+ * @param curves curves in use
+ * @param lines frequency ranges needed [Hz]
+ * @returns a sentence, or null where all curves cover all lines
+ * @example firstGap([], lines) // null
+ * Source: a curve is never extrapolated.
+ */
+export function firstGap(curves: readonly ImpedanceCurve[], lines: readonly Interval[]): string | null {
+	return lines.map((line) => uncovered(curves, line)).find((gap) => gap !== null) ?? null;
+}
+
+const ends = ({ from, to }: Interval): number[] => (from === to ? [from] : [from, to]);
+
+/**
+ * Lists the four corners of the tolerances of L and C; one where there are none.
+ * @param design the worksheet's design
+ * @returns filters without Cx
+ * @example cornersOf(chargerAuxiliary).length // 4
+ * Source: worst case, arithmetical.
+ */
+export function cornersOf(design: Design): Filter[] {
+	const filter = filterOf(design);
+	const inductances = ends(toleranceInterval(design.inductor.inductance_H, design.inductor));
+	const capacitances = ends(toleranceInterval(design.capacitor.capacitance_F, design.capacitor));
+	return inductances.flatMap((inductance) =>
+		capacitances.map((capacitance) => ({
+			...filter,
+			inductor: { ...filter.inductor, inductance },
+			capacitor: { ...filter.capacitor, capacitance }
+		}))
+	);
 }

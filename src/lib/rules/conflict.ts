@@ -140,5 +140,9 @@ export function conflictOf(design: Design, findings: readonly Finding[]): Confli
 	).flatMap((index) => closing[index] ?? []);
 	const alone = set.length === 1 ? 'alone it leaves nothing.' : remainder(set, choice);
 	const rules = set.map((finding) => finding.rule);
-	return { rules, explanation: `${set.map(forbids).join('; ')}: ${alone}`, cure: cureOf(design, rules) };
+	return {
+		rules,
+		explanation: `${set.map(forbids).join('; ')}: ${alone}`,
+		cure: cureOf(design, findings, rules)
+	};
 }

@@ -1,9 +1,9 @@
 /** The smallest change of one value that opens a nominal window again. */
 import type { Design } from '$lib/design/design';
-import type { Cure } from './finding';
+import type { Cure, Finding } from './finding';
 import { knobsOf, type Knob } from './knob';
-import { findingsOf } from './table';
-import { closingBands, leavesNominal } from './windows';
+import { findingOf } from './table';
+import { closesWindows, closingBands, leavesNominal } from './windows';
 import { worded } from './wording';
 
 /** Ratios tried in turn, as natural logarithms: one per cent up to a factor of a thousand. */
@@ -11,7 +11,19 @@ const REACH = [0.01, 0.02, 0.05, 0.1, 0.2, 0.35, 0.5, 0.75, 1, 1.4, 1.9, 2.5, 3.
 
 const CURE_DIGITS = 3;
 
-const opens = (design: Design): boolean => leavesNominal(closingBands(findingsOf(design)), design.choice);
+/** Evaluates a changed design, asking again only the rules that the change can reach and that close windows. */
+type Trial = (changed: Design) => boolean;
+
+const trialOf = (findings: readonly Finding[], knob: Knob): Trial => {
+	const asked = findings.filter(closesWindows);
+	return (changed) => {
+		const answers = asked.map((finding) => {
+			const rule = changed.rules.find(({ id }) => id === finding.rule);
+			return rule !== undefined && knob.reaches(rule) ? findingOf(changed, rule) : finding;
+		});
+		return leavesNominal(closingBands(answers), changed.choice);
+	};
+};
 
 /**
  * Rounds away from where it was computed, to three significant digits.
@@ -37,38 +49,45 @@ const neighbour = (rounded: number, direction: 'up' | 'down'): number => {
 const within = (knob: Knob, value: number): boolean =>
 	value >= (knob.least ?? 0) && value <= (knob.most ?? Infinity);
 
+interface Bounds {
+	readonly shut: number;
+	readonly open: number;
+}
+
 /** Bisects between a value that leaves none and one that opens a window. */
-const edge = (design: Design, knob: Knob, bounds: { shut: number; open: number }): number => {
+const edge = (opens: (value: number) => boolean, bounds: Bounds): number => {
 	let { shut, open } = bounds;
-	while (Math.abs(open / shut - 1) > 1e-7) {
+	while (Math.abs(open / shut - 1) > 1e-6) {
 		const middle = Math.sqrt(open * shut);
-		if (opens(knob.turn(design, middle))) open = middle;
+		if (opens(middle)) open = middle;
 		else shut = middle;
 	}
 	return open;
 };
 
-const bracket = (design: Design, knob: Knob): { shut: number; open: number } | null => {
+const bracket = (opens: (value: number) => boolean, knob: Knob): Bounds | null => {
 	const sign = knob.direction === 'up' ? 1 : -1;
 	let shut = knob.value;
 	for (const reach of REACH) {
 		const asked = knob.value * Math.exp(sign * reach);
 		const tried = within(knob, asked) ? asked : sign < 0 ? (knob.least ?? 0) : (knob.most ?? Infinity);
 		if (tried === shut) return null;
-		if (opens(knob.turn(design, tried))) return { shut, open: tried };
+		if (opens(tried)) return { shut, open: tried };
 		shut = tried;
 	}
 	return null;
 };
 
 /** The value rounded to the safe side, checked by evaluating the design with it. */
-const turned = (design: Design, knob: Knob): number | null => {
-	const bounds = bracket(design, knob);
+const turned = (design: Design, findings: readonly Finding[], knob: Knob): number | null => {
+	const trial = trialOf(findings, knob);
+	const opens = (value: number): boolean => trial(knob.turn(design, value));
+	const bounds = bracket(opens, knob);
 	if (bounds === null) return null;
-	const exact = edge(design, knob, bounds);
+	const exact = edge(opens, bounds);
 	let value = roundOutward(exact, knob.direction);
 	for (let step = 0; step < 3; step += 1) {
-		if (within(knob, value) && opens(knob.turn(design, value))) return value;
+		if (within(knob, value) && opens(value)) return value;
 		value = neighbour(value, knob.direction);
 	}
 	return null;
@@ -90,18 +109,19 @@ const cureFrom = ({ knob, value }: Turned): Cure => {
  * Finds the smallest change of one value that, evaluated again, opens a nominal window: parts of the filter
  * before factors and limits of design rules; limits of mandatory rules are never touched.
  * @param design the worksheet's design, without a nominal window
+ * @param findings what its rules answered
  * @param rules ids of the rules in conflict
  * @returns the cure, rounded to the safe side; null where no single change cures
- * @example cureOf(chargerAuxiliaryFirstTry, ['share', 'reactance'])?.text // 'C ≥ 1.72 µF would open a window'
+ * @example cureOf(chargerAuxiliaryFirstTry, findings, ['share', 'reactance'])?.text // 'C ≥ 1.72 µF would open a window'
  * Source: common practice.
  */
-export function cureOf(design: Design, rules: readonly string[]): Cure | null {
+export function cureOf(design: Design, findings: readonly Finding[], rules: readonly string[]): Cure | null {
 	const knobs = knobsOf(design, rules);
 	for (const tier of ['part', 'factor'] as const) {
 		const found = knobs
 			.filter((knob) => knob.tier === tier)
 			.flatMap((knob): Turned[] => {
-				const value = turned(design, knob);
+				const value = turned(design, findings, knob);
 				return value === null ? [] : [{ knob, value, change: Math.abs(Math.log(value / knob.value)) }];
 			});
 		const best = found.reduce<Turned | null>(

@@ -1,12 +1,16 @@
 /** The peak of the current that rushes in at switch-on. */
-import type { Design, InrushCurrentRule, Supply } from '$lib/design/design';
+import type { Design, ImpedanceSource, InrushCurrentRule, Supply } from '$lib/design/design';
+import { capacitorPart, filterOf } from './circuit';
 import type { Finding, Formula } from './finding';
 import { computed, given, parts, symbol } from './formula';
 import { sourceOf } from './lines';
 import type { Method } from './method';
 import { evaluated, notEvaluated } from './outcome';
+import { scanBands } from './scan';
 import { limitingCapacitance } from './series-circuit';
-import { plain } from './wording';
+import { switchOnPeak } from './switch-on';
+import { toleranceInterval } from './tolerance';
+import { bandsParts, plain } from './wording';
 
 export const INRUSH_CURRENT: Method = {
 	kind: 'inrush-current',
@@ -43,6 +47,48 @@ export function stepVoltage(supply: Pick<Supply, 'kind' | 'voltageMax_V'>): numb
 	return supply.kind === 'ac' ? Math.SQRT2 * supply.voltageMax_V : supply.voltageMax_V;
 }
 
+/** L at its smallest and C at its largest, with everything empty: the hardest that the network is driven. */
+const wholeNetwork = (design: Design, rule: InrushCurrentRule, source: ImpedanceSource): Finding => {
+	if (design.inductor.curve !== undefined || design.capacitor.curve !== undefined) {
+		return notEvaluated(
+			rule,
+			INRUSH_CURRENT,
+			'A measured curve gives no transient: enter L and C as values, without a curve.'
+		);
+	}
+	const nominal = filterOf(design);
+	const filter = {
+		...nominal,
+		inductor: {
+			...nominal.inductor,
+			inductance: toleranceInterval(design.inductor.inductance_H, design.inductor).from
+		},
+		capacitor: {
+			...nominal.capacitor,
+			capacitance: toleranceInterval(design.capacitor.capacitance_F, design.capacitor).to
+		}
+	};
+	const voltage = stepVoltage(design.supply);
+	const step = { voltage, inductance: source.inductanceMin_H, resistance: source.resistance_ohm, filter };
+	const { curve: _, ...unmeasured } = design.choice;
+	const bands = scanBands(
+		(capacitance) =>
+			switchOnPeak({ ...step, choice: capacitorPart(design, unmeasured, capacitance) }) / rule.limit_A
+	);
+	const cause = `Inrush of Cx and C above ${plain(rule.limit_A, 'current')} from ${source.label}`;
+	return evaluated(rule, INRUSH_CURRENT, {
+		bands: bands.map((band) => ({ ...band, cause, source: source.id })),
+		formula: {
+			general: parts`${symbol('Î')}(${symbol('C', 'x')}, ${symbol('C')}) ≤ ${symbol('I')}`,
+			numbers: parts`${given(rule.limit_A, 'current')}, ${computed(voltage, 'voltage')}, ${given(step.inductance, 'inductance')}, ${given(step.resistance, 'resistance')}`,
+			result: bandsParts(bands)
+		},
+		assumptions: [
+			'L at its smallest and C at its largest value; series resistances and damping as given, self-inductances left out.'
+		]
+	});
+};
+
 /**
  * Forbids every Cx whose inrush exceeds the limit: (Cx*, ∞) for Cx alone, Cx* by bisection.
  * @param design the worksheet's design
@@ -60,8 +106,7 @@ export function inrushCurrent(design: Design, rule: InrushCurrentRule): Finding 
 			`${source.label} is not given as inductance and resistance: name such a source.`
 		);
 	}
-	if (rule.includeCapacitor)
-		return notEvaluated(rule, INRUSH_CURRENT, 'Not calculated with the capacitor included.');
+	if (rule.includeCapacitor) return wholeNetwork(design, rule, source);
 	const voltage = stepVoltage(design.supply);
 	const step = { voltage, inductance: source.inductanceMin_H, resistance: source.resistance_ohm };
 	const limit = limitingCapacitance(step, rule.limit_A);

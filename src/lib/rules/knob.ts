@@ -1,5 +1,5 @@
 /** The values of a design that may be turned to cure a conflict, and the way each is turned. */
-import type { Design, Rule } from '$lib/design/design';
+import type { Design, Rule, RuleKind } from '$lib/design/design';
 import type { Quantity } from '$lib/quantity/unit';
 import { METHODS } from './method';
 
@@ -16,7 +16,22 @@ export interface Knob {
 	readonly least?: number;
 	readonly most?: number;
 	readonly turn: (design: Design, value: number) => Design;
+	/** Whether turning it can change what a rule answers. */
+	readonly reaches: (rule: Rule) => boolean;
 }
+
+/** What these kinds answer does not depend on the filter's parts. */
+const APART_FROM_PARTS: readonly RuleKind[] = [
+	'reactance-limit',
+	'voltage-rating',
+	'reactive-current',
+	'displacement-factor',
+	'discharge',
+	'manual-band'
+];
+
+const dependsOnParts = (rule: Rule): boolean =>
+	!APART_FROM_PARTS.includes(rule.kind) && !(rule.kind === 'inrush-current' && !rule.includeCapacitor);
 
 const capacitor = (design: Design): Knob => ({
 	tier: 'part',
@@ -25,7 +40,8 @@ const capacitor = (design: Design): Knob => ({
 	quantity: 'capacitance',
 	value: design.capacitor.capacitance_F,
 	direction: 'up',
-	turn: (from, value) => ({ ...from, capacitor: { ...from.capacitor, capacitance_F: value } })
+	turn: (from, value) => ({ ...from, capacitor: { ...from.capacitor, capacitance_F: value } }),
+	reaches: dependsOnParts
 });
 
 const inductor = (design: Design, direction: 'up' | 'down'): Knob => ({
@@ -35,7 +51,8 @@ const inductor = (design: Design, direction: 'up' | 'down'): Knob => ({
 	quantity: 'inductance',
 	value: design.inductor.inductance_H,
 	direction,
-	turn: (from, value) => ({ ...from, inductor: { ...from.inductor, inductance_H: value } })
+	turn: (from, value) => ({ ...from, inductor: { ...from.inductor, inductance_H: value } }),
+	reaches: dependsOnParts
 });
 
 const seriesInductance = (design: Design): Knob => ({
@@ -45,7 +62,8 @@ const seriesInductance = (design: Design): Knob => ({
 	quantity: 'inductance',
 	value: design.choice.esl_H ?? 0,
 	direction: 'down',
-	turn: (from, value) => ({ ...from, choice: { ...from.choice, esl_H: value } })
+	turn: (from, value) => ({ ...from, choice: { ...from.choice, esl_H: value } }),
+	reaches: dependsOnParts
 });
 
 interface Parameter {
@@ -105,7 +123,8 @@ const parametersOf = (design: Design, rule: Rule): Knob[] =>
 			pointer: `/rules/${String(design.rules.indexOf(rule))}/${key}`,
 			symbol: `${name} of ${METHODS[rule.kind].name} (${rule.id})`,
 			value: valueOf(rule, key),
-			turn: (from: Design, value: number) => withParameter(from, rule.id, { [key]: value })
+			turn: (from: Design, value: number) => withParameter(from, rule.id, { [key]: value }),
+			reaches: ({ id }: Rule) => id === rule.id
 		}));
 
 const partsOf = (design: Design, rule: Rule): Knob[] => {

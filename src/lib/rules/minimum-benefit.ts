@@ -1,9 +1,15 @@
 /** The least benefit that Cx must bring at every line. */
 import type { Design, MinimumBenefitRule } from '$lib/design/design';
+import { benefitFinder } from '$lib/network/benefit';
+import { capacitorPart, filterOf, firstGap, partCurves, sourceCurves, sourceModel } from './circuit';
 import type { Finding } from './finding';
-import { parts, symbol } from './formula';
+import { given, parts, symbol } from './formula';
+import { linesOf, sourceOf } from './lines';
 import type { Method } from './method';
-import { notEvaluated } from './outcome';
+import { evaluated, notEvaluated } from './outcome';
+import { scanBands } from './scan';
+import { bandsParts, plain } from './wording';
+import { nominalResonances } from './worst-capacitance';
 
 export const MINIMUM_BENEFIT: Method = {
 	kind: 'minimum-benefit',
@@ -25,6 +31,44 @@ export const MINIMUM_BENEFIT: Method = {
 	cautions: ['Differential mode only.']
 };
 
-export function minimumBenefit(_design: Design, rule: MinimumBenefitRule): Finding {
-	return notEvaluated(rule, MINIMUM_BENEFIT, 'Not calculated by this version.');
+/**
+ * Forbids every Cx whose benefit on the source is under the minimum at any line at or above the stated frequency.
+ * @param design the worksheet's design
+ * @param rule source, minimum [dB], lowest frequency that counts [Hz]
+ * @returns a finding with one or more bands [F]; not-evaluated where a curve has no data or no line counts
+ * @example minimumBenefit(design, { source: 'amn', minimum_dB: 20, … }).bands[0].from // 0
+ * Source: nodal analysis of the ladder; edges by scan and bisection.
+ */
+export function minimumBenefit(design: Design, rule: MinimumBenefitRule): Finding {
+	const source = sourceOf(design, rule.source);
+	const [filter, model] = [filterOf(design), sourceModel(design, source)];
+	const { curve: _, ...unmeasured } = design.choice;
+	const lines = linesOf(design)
+		.filter((line) => line.to >= rule.frequencyFrom_Hz)
+		.map((line) => ({ ...line, from: Math.max(line.from, rule.frequencyFrom_Hz) }));
+	if (lines.length === 0) {
+		return notEvaluated(
+			rule,
+			MINIMUM_BENEFIT,
+			`No line lies at or above ${plain(rule.frequencyFrom_Hz, 'frequency')}: enter more harmonics.`
+		);
+	}
+	const gap = firstGap([...partCurves(filter), ...sourceCurves(model)], lines);
+	if (gap !== null) return notEvaluated(rule, MINIMUM_BENEFIT, gap);
+	const finders = lines.map((line) => benefitFinder(filter, model, line));
+	const ratio = (capacitance: number): number => {
+		const part = capacitorPart(design, unmeasured, capacitance);
+		const least = finders.reduce((gain, finder) => Math.min(gain, finder.worst(part).gain_dB), Infinity);
+		return 10 ** ((rule.minimum_dB - least) / 20);
+	};
+	const bands = scanBands(ratio, nominalResonances(filter, model, lines));
+	const cause = `Benefit under ${plain(rule.minimum_dB, 'gain')} on ${source.label}`;
+	return evaluated(rule, MINIMUM_BENEFIT, {
+		bands: bands.map((band) => ({ ...band, cause, source: source.id })),
+		formula: {
+			general: MINIMUM_BENEFIT.formula,
+			numbers: parts`${given(rule.minimum_dB, 'gain')} from ${given(rule.frequencyFrom_Hz, 'frequency')}`,
+			result: bandsParts(bands)
+		}
+	});
 }

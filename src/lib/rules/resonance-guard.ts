@@ -10,7 +10,7 @@ import { computed, given, parts, symbol } from './formula';
 import { linesOf, sourceOf, type Line } from './lines';
 import type { Method } from './method';
 import { evaluated, notEvaluated } from './outcome';
-import { toleranceInterval } from './warnings';
+import { toleranceInterval } from './tolerance';
 import { plain, worded, wordedRange } from './wording';
 import { worstRange, type Box } from './worst-capacitance';
 

@@ -3,7 +3,8 @@ import type { Design } from '$lib/design/design';
 import { relativelyEqual, type Interval } from '$lib/quantity/interval';
 import type { Gains } from './benefit';
 import type { Finding, Verdict, Window } from './finding';
-import { breaksRule, toleranceInterval, warningsOf } from './warnings';
+import { toleranceInterval } from './tolerance';
+import { breaksRule, warningsOf } from './warnings';
 import { closesWindows } from './windows';
 
 const atMost = (a: number, b: number): boolean => a <= b || relativelyEqual(a, b);

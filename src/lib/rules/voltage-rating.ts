@@ -1,9 +1,12 @@
 /** The ringing peak of the voltage on Cx at switch-on. */
 import type { Design, VoltageRatingRule } from '$lib/design/design';
 import type { Finding } from './finding';
-import { parts, symbol } from './formula';
+import { computed, given, parts, symbol } from './formula';
+import { stepVoltage } from './inrush-current';
+import { sourceOf } from './lines';
 import type { Method } from './method';
-import { notEvaluated } from './outcome';
+import { evaluated, notEvaluated } from './outcome';
+import { plain } from './wording';
 
 export const VOLTAGE_RATING: Method = {
 	kind: 'voltage-rating',
@@ -26,6 +29,50 @@ export const VOLTAGE_RATING: Method = {
 	]
 };
 
-export function voltageRating(_design: Design, rule: VoltageRatingRule): Finding {
-	return notEvaluated(rule, VOLTAGE_RATING, 'Not calculated by this version.');
+/** Capacitance from which on the overshoot stays within the limit: 0 where any does, Infinity where none does [F]. */
+const leastCapacitance = (
+	voltage: number,
+	limit: number,
+	{ inductance, resistance }: { inductance: number; resistance: number }
+): number => {
+	if (limit >= 2 * voltage || (inductance === 0 && limit >= voltage)) return 0;
+	if (limit < voltage || resistance === 0) return Infinity;
+	const overshoot = Math.log(limit / voltage - 1);
+	const zeta = limit === voltage ? 1 : -overshoot / Math.hypot(Math.PI, overshoot);
+	return inductance * ((2 * zeta) / resistance) ** 2;
+};
+
+/**
+ * Forbids every Cx that rings above the limit: (0, Ls·(2ζ/Rs)²) with the ζ whose overshoot is the limit.
+ * @param design the worksheet's design
+ * @param rule source, limit [V]
+ * @returns a finding with at most one band [F]; not-evaluated for a source that is not given as Ls and Rs
+ * @example voltageRating(design, { source: 'bus', limit_V: 50, … }).bands[0].from // 0
+ * Source: textbook.
+ */
+export function voltageRating(design: Design, rule: VoltageRatingRule): Finding {
+	const source = sourceOf(design, rule.source);
+	if (source.kind !== 'impedance') {
+		return notEvaluated(
+			rule,
+			VOLTAGE_RATING,
+			`${source.label} is not given as inductance and resistance: name such a source.`
+		);
+	}
+	const voltage = stepVoltage(design.supply);
+	const worst = { inductance: source.inductanceMax_H, resistance: source.resistance_ohm };
+	const limit = leastCapacitance(voltage, rule.limit_V, worst);
+	const cause = `Ringing above ${plain(rule.limit_V, 'voltage')} from ${source.label}`;
+	const result =
+		limit === Infinity
+			? parts`no capacitance`
+			: parts`${symbol('C', 'x')} ≥ ${computed(limit, 'capacitance', 'up')}`;
+	return evaluated(rule, VOLTAGE_RATING, {
+		bands: limit === 0 ? [] : [{ from: 0, to: limit, cause, source: source.id }],
+		formula: {
+			general: VOLTAGE_RATING.formula,
+			numbers: parts`${given(rule.limit_V, 'voltage')}, ${computed(voltage, 'voltage')}, ${given(worst.inductance, 'inductance')}, ${given(worst.resistance, 'resistance')}`,
+			result: limit === 0 ? parts`no limit` : result
+		}
+	});
 }

@@ -1,22 +1,10 @@
 /** What a value does that no closing rule forbids, but that whoever picks it must know. */
-import type { Source, Tolerance } from '$lib/design/design';
+import type { Source } from '$lib/design/design';
 import { relativelyEqual, type Interval } from '$lib/quantity/interval';
 import type { Gains } from './benefit';
 import type { Benefit, Finding } from './finding';
 import { closesWindows } from './windows';
 import { plain, worded } from './wording';
-
-/**
- * Works out the interval in which the real capacitance of a nominal value lies.
- * @param nominal nominal value [F]
- * @param tolerance fractions
- * @returns closed interval [F]
- * @example toleranceInterval(3.3e-7, { toleranceMinus: 0.1, tolerancePlus: 0.1 }) // 297 … 363 nF
- * Source: common practice.
- */
-export function toleranceInterval(nominal: number, tolerance: Tolerance): Interval {
-	return { from: nominal * (1 - tolerance.toleranceMinus), to: nominal * (1 + tolerance.tolerancePlus) };
-}
 
 const before = (a: number, b: number): boolean => a < b && !relativelyEqual(a, b);
 

@@ -1,7 +1,8 @@
 /** Values and ranges in the sentences of findings, warnings and explanations. */
 import { formatQuantity } from '$lib/quantity/format';
 import type { Quantity } from '$lib/quantity/unit';
-import { COMPUTED_DIGITS } from './formula';
+import type { FormulaPart } from './finding';
+import { COMPUTED_DIGITS, parts } from './formula';
 
 /**
  * Writes a computed value with three digits.
@@ -68,4 +69,17 @@ export function wordedBand({ from, to }: { readonly from: number; readonly to: n
 	if (from === 0) return `below ${worded(to, 'capacitance', 'up')}`;
 	if (to === Infinity) return `above ${worded(from, 'capacitance', 'down')}`;
 	return `from ${worded(from, 'capacitance', 'down')} to ${worded(to, 'capacitance', 'up')}`;
+}
+
+/**
+ * Writes what bands forbid as the result of a formula.
+ * @param bands open bands [F]
+ * @returns parts
+ * @example bandsParts([{ from: 3.96e-7, to: Infinity }]) // 'not above 396 nF'
+ * Source: common practice.
+ */
+export function bandsParts(bands: readonly { readonly from: number; readonly to: number }[]): FormulaPart[] {
+	if (bands.length === 0) return parts`no limit`;
+	const shown = bands.slice(0, 2).map(wordedBand).join(', ');
+	return parts`not ${bands.length > 2 ? `${shown}, and ${String(bands.length - 2)} more` : shown}`;
 }

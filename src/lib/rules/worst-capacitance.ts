@@ -182,3 +182,29 @@ export function worstRange(box: Box): Interval | null {
 	const from = plain ? plainCapacitance(box, 'to', -1) : extreme(box, grid, -1);
 	return { from: Math.max(0, from), to };
 }
+
+/**
+ * Lists capacitances that resonate at the given lines with nominal parts: the ends and the middle of each range.
+ * @param filter the other parts
+ * @param source the source
+ * @param lines frequency ranges [Hz]
+ * @returns capacitances [F]
+ * @example nominalResonances(filter, source, [{ from: 145e3, to: 145e3 }]) // [4.87e-8, …]
+ * Source: nodal analysis.
+ */
+export function nominalResonances(filter: Filter, source: SourceModel, lines: readonly Interval[]): number[] {
+	const exactly = (value: number): Interval => ({ from: value, to: value });
+	return lines.flatMap((frequency) => {
+		const { inductor, capacitor } = filter;
+		const worst = worstRange({
+			filter,
+			inductance: exactly(inductor.inductance),
+			capacitance: exactly(capacitor.capacitance),
+			source,
+			frequency
+		});
+		return worst === null
+			? []
+			: [worst.from, Math.sqrt(worst.from * worst.to), worst.to].filter((value) => value > 0);
+	});
+}

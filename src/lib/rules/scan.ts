@@ -1,0 +1,80 @@
+/** Forbidden bands of a quantity that need not rise or fall with Cx: scan, refine, find the edges. */
+import { signChange } from '$lib/network/search';
+import type { Interval } from '$lib/quantity/interval';
+
+/** The scan's ends; beyond them a band goes on to 0 or without end [F]. */
+const SMALLEST = 1e-12;
+const LARGEST = 0.1;
+
+const COARSE_PER_DECADE = 10;
+/** Cells in which the quantity may cross its limit are cut into this many: 40 points a decade. */
+const FINE = 4;
+
+/** A cell is left whole where both ends lie this far from the limit on one side … */
+const CLEAR = Math.log(3);
+/** … and differ from each other by less than this. */
+const CALM = Math.log(2);
+
+/** A place of the scan: ln C, and ln of the quantity over its limit, above 0 where it is forbidden. */
+interface Place {
+	readonly at: number;
+	readonly excess: number;
+}
+
+const isQuiet = (left: Place, right: Place): boolean =>
+	left.excess > 0 === right.excess > 0 &&
+	Math.abs(left.excess) > CLEAR &&
+	Math.abs(right.excess) > CLEAR &&
+	!(Math.abs(left.excess - right.excess) > CALM);
+
+/** Logarithms without bound would spoil the search for the edge. */
+const bounded = (excess: number): number =>
+	Math.max(-700, Math.min(700, Number.isNaN(excess) ? 700 : excess));
+
+const coarsePlaces = (excess: (at: number) => number, extra: readonly number[]): Place[] => {
+	const count = Math.round(Math.log10(LARGEST / SMALLEST)) * COARSE_PER_DECADE;
+	const even = Array.from({ length: count + 1 }, (_, index) => SMALLEST * 10 ** (index / COARSE_PER_DECADE));
+	const inside = extra.filter((value) => value > SMALLEST && value < LARGEST);
+	const sorted = [...even, ...inside].sort((a, b) => a - b);
+	return sorted.map((value) => ({ at: Math.log(value), excess: excess(Math.log(value)) }));
+};
+
+const refined = (excess: (at: number) => number, coarse: readonly Place[]): Place[] =>
+	coarse.flatMap((place, index) => {
+		const left = coarse[index - 1];
+		if (left === undefined || isQuiet(left, place)) return [place];
+		const between = Array.from({ length: FINE - 1 }, (_, step) => {
+			const at = left.at + ((place.at - left.at) * (step + 1)) / FINE;
+			return { at, excess: excess(at) };
+		});
+		return [...between, place];
+	});
+
+/**
+ * Finds the capacitances at which a quantity exceeds its limit, from 1 pF to 100 mF with 40 points a decade wherever
+ * it may cross, the edges found to the last digits; a band at an end of the scan goes on beyond it.
+ * @param ratio the quantity over its limit at a capacitance [F]; forbidden above 1
+ * @param extra capacitances that must not be passed over, such as resonances [F]
+ * @returns open bands, rising [F]
+ * @example scanBands((c) => c / 1e-6) // [{ from: 1e-6, to: Infinity }]
+ * Source: common practice.
+ */
+export function scanBands(ratio: (capacitance: number) => number, extra: readonly number[] = []): Interval[] {
+	const excess = (at: number): number => bounded(Math.log(ratio(Math.exp(at))));
+	const places = refined(excess, coarsePlaces(excess, extra));
+	const bands: Interval[] = [];
+	let from = (places[0]?.excess ?? 0) > 0 ? 0 : null;
+	places.forEach((place, index) => {
+		const left = places[index - 1];
+		if (left === undefined || left.excess > 0 === place.excess > 0) return;
+		const edge = Math.exp(signChange(excess, left.at, place.at));
+		if (from === null) {
+			from = edge;
+		} else {
+			bands.push({ from, to: edge });
+			from = null;
+		}
+	});
+	if (from !== null) bands.push({ from, to: Infinity });
+	return bands;
+}
