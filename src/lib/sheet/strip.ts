@@ -1,0 +1,194 @@
+/** The strip: the sheet's calculation column. Rows are packed into one column or two; what is too long gives way. */
+import type { Item } from '$lib/scene/scene';
+import type { Ink } from './ink';
+import type { Box } from './paper';
+import { group, lettered } from './pen';
+import { chooseAxis } from './strip-bar';
+import { benefitBlocks } from './strip-benefit';
+import { blankBlocks, type BlankContext } from './strip-blank';
+import { BASE, CAP, NUMBER_WIDTH, ROW, type Block, type StripContext } from './strip-block';
+import { cautionBlocks } from './strip-cautions';
+import { choiceBlock } from './strip-choice';
+import { givenBlocks } from './strip-given';
+import { ruleBlocks } from './strip-rules';
+import { windowSection } from './strip-window';
+import { fill, type Words } from './words';
+
+/** Room between the strip's border and its rows at k = 1 [mm]. */
+const PAD = { side: 1.8, top: 1, foot: 0.6 } as const;
+/** The most that is put before a head when there is room to spare [mm]. */
+const SPREAD = 2.4;
+
+/** How a strip gives way, from roomy to dense: never by smaller letters. */
+interface Density {
+	/** Sections 1 to 4 with a head each. */
+	readonly heads: boolean;
+	readonly formulas: boolean;
+	readonly harmonics: number;
+	/** Lines of each open point. */
+	readonly open: number;
+}
+
+const DENSITIES: readonly Density[] = [
+	{ heads: true, formulas: true, harmonics: 5, open: 3 },
+	{ heads: false, formulas: true, harmonics: 5, open: 3 },
+	{ heads: false, formulas: true, harmonics: 4, open: 2 },
+	{ heads: false, formulas: true, harmonics: 3, open: 2 },
+	{ heads: false, formulas: false, harmonics: 5, open: 2 },
+	{ heads: false, formulas: false, harmonics: 3, open: 2 },
+	{ heads: false, formulas: false, harmonics: 1, open: 1 }
+];
+
+const rowsAt = (context: StripContext, density: Density): Block[] => {
+	const axis = chooseAxis(context);
+	return [
+		...givenBlocks(context, density.heads),
+		...ruleBlocks(context, axis, density.formulas),
+		...windowSection(context, axis),
+		choiceBlock(context),
+		...benefitBlocks(context, density.harmonics),
+		...cautionBlocks(context, density.open)
+	];
+};
+
+interface Placed {
+	readonly block: Block;
+	readonly column: number;
+}
+
+/** A head must not stand alone at a column's foot: it moves with what follows it. */
+const headsBefore = (blocks: readonly Block[], index: number): number => {
+	let first = index;
+	while (first > 0 && blocks[first - 1]?.heading === true) first -= 1;
+	return first;
+};
+
+/** Fills the columns in order; null when something is left over. */
+const pack = (blocks: readonly Block[], rooms: readonly number[]): Placed[] | null => {
+	const placed: Placed[] = [];
+	let column = 0;
+	let used = 0;
+	for (let index = 0; index < blocks.length; index += 1) {
+		const block = blocks[index];
+		if (block === undefined) break;
+		if (used + block.height <= (rooms[column] ?? 0) + 1e-9) {
+			placed.push({ block, column });
+			used += block.height;
+			continue;
+		}
+		const first = headsBefore(blocks, index);
+		if (column + 1 >= rooms.length || (used === 0 && first === index)) return null;
+		placed.splice(first);
+		column += 1;
+		used = 0;
+		index = first - 1;
+	}
+	return placed;
+};
+
+const moreBlock = (count: number, context: Dress): Block => {
+	const { ink, k, words } = context;
+	return {
+		height: ROW * k,
+		draw: (x, y) => [
+			lettered(fill(words.strip.moreRows, { n: String(count) }), x + NUMBER_WIDTH * k, y + BASE * k, {
+				cap: CAP * k,
+				fill: ink.ink
+			})
+		]
+	};
+};
+
+type Dress = Pick<BlankContext, 'ink' | 'k' | 'words'>;
+
+/** Leaves out the last rows that may give way, until the rest fits, and says how many. */
+const cutToFit = (blocks: readonly Block[], rooms: readonly number[], dress: Dress): Placed[] => {
+	const optional = blocks.flatMap((block, index) => (block.optional === true ? [index] : []));
+	for (let count = 1; count <= optional.length; count += 1) {
+		const dropped = new Set(optional.slice(-count));
+		const first = Math.min(...dropped);
+		const kept = blocks.flatMap((block, index) => {
+			if (index === first) return [moreBlock(count, dress)];
+			return dropped.has(index) ? [] : [block];
+		});
+		const placed = pack(kept, rooms);
+		if (placed !== null) return placed;
+	}
+	return packSome(
+		blocks.filter((block) => block.optional !== true),
+		rooms
+	);
+};
+
+/** The last resort on a very small strip: whole blocks from the top, as many as fit. */
+const packSome = (blocks: readonly Block[], rooms: readonly number[]): Placed[] => {
+	for (let count = blocks.length; count > 0; count -= 1) {
+		const placed = pack(blocks.slice(0, count), rooms);
+		if (placed !== null) return placed;
+	}
+	return [];
+};
+
+const drawn = (
+	placed: readonly Placed[],
+	columns: readonly Box[],
+	rooms: readonly number[],
+	k: number
+): Item[] =>
+	columns.flatMap((box, column) => {
+		const blocks = placed.filter((entry) => entry.column === column).map(({ block }) => block);
+		const taken = blocks.reduce((sum, block) => sum + block.height, 0);
+		const startsSection = (index: number): boolean =>
+			index > 0 && blocks[index]?.heading === true && blocks[index - 1]?.heading !== true;
+		const breaks = blocks.filter((_, index) => startsSection(index)).length;
+		const spare = Math.max(0, (rooms[column] ?? 0) - taken);
+		const spread = breaks === 0 ? 0 : Math.min(SPREAD * k, spare / breaks);
+		let y = box.y + PAD.top * k;
+		return blocks.flatMap((block, index) => {
+			if (startsSection(index)) y += spread;
+			const items = block.draw(box.x + PAD.side * k, y);
+			y += block.height;
+			return items;
+		});
+	});
+
+export interface StripInput {
+	readonly columns: readonly Box[];
+	/** Rows that are filled in; null draws a blank strip. */
+	readonly context: Omit<StripContext, 'width' | 'k' | 'ink' | 'words'> | null;
+	readonly blank: BlankContext['design'];
+	readonly ink: Ink;
+	readonly words: Words;
+	readonly k: number;
+}
+
+/**
+ * Draws the strip.
+ * @param input its columns [mm], what fills the rows, palette, words, scale
+ * @returns one group with role `strip`; nothing without columns
+ * @example stripItems({ ...input, columns: [] }) // []
+ * Source: our own rule.
+ */
+export function stripItems(input: StripInput): Item[] {
+	const { columns, context, blank, ink, words, k } = input;
+	const [first] = columns;
+	if (first === undefined) return [];
+	const width = first.width - 2 * PAD.side * k;
+	const rooms = columns.map(({ height }) => height - (PAD.top + PAD.foot) * k);
+	const dress = { ink, words, k, width };
+	const ways =
+		context === null
+			? [(): Block[] => blankBlocks({ ...dress, design: blank })]
+			: DENSITIES.map((density) => (): Block[] => rowsAt({ ...context, ...dress }, density));
+	return [group(drawn(placeBlocks(ways, rooms, dress), columns, rooms, k), { role: 'strip' })];
+}
+
+const placeBlocks = (ways: readonly (() => Block[])[], rooms: readonly number[], dress: Dress): Placed[] => {
+	let blocks: Block[] = [];
+	for (const way of ways) {
+		blocks = way();
+		const placed = pack(blocks, rooms);
+		if (placed !== null) return placed;
+	}
+	return cutToFit(blocks, rooms, dress);
+};
