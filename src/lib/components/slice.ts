@@ -16,7 +16,10 @@ export interface Box {
 }
 
 /** Steep or shallow strokes, never near the 45° of the L and C lines; dots advise. */
-const HATCH_ANGLE: Readonly<Record<Exclude<RuleClass, 'advisory'>, number>> = { mandatory: 67.5, design: 22.5 };
+const HATCH_ANGLE: Readonly<Record<Exclude<RuleClass, 'advisory'>, number>> = {
+	mandatory: 67.5,
+	design: 22.5
+};
 
 const SHORTEST_DECADES = 4;
 const LONGEST_DECADES = 7;
@@ -70,9 +73,7 @@ const stroke = (offset: number, slope: number, { x, y, width, height }: Box): st
 	const atX = (px: number): number => y + height - (px - x) * slope + offset;
 	const left = Math.max(x, x + (offset - 0) / slope);
 	const right = Math.min(x + width, x + (height + offset) / slope);
-	return right - left < 0.2
-		? ''
-		: `M${round(left)} ${round(atX(left))}L${round(right)} ${round(atX(right))}`;
+	return right - left < 0.2 ? '' : `M${round(left)} ${round(atX(left))}L${round(right)} ${round(atX(right))}`;
 };
 
 const dots = ({ x, y, width, height }: Box, pitch: number): string => {

@@ -1,0 +1,8 @@
+import { fourOfQuery } from '$lib/components/four';
+import { allowPublic } from '$lib/server/access';
+import type { PageServerLoad } from './$types';
+
+export const load: PageServerLoad = (event) => {
+	allowPublic(event);
+	return { four: fourOfQuery(event.url.searchParams) };
+};
