@@ -1,6 +1,6 @@
-import type { Handle, HandleServerError, ServerInit } from '@sveltejs/kit';
+import type { Handle, HandleServerError, MaybePromise, RequestEvent, ServerInit } from '@sveltejs/kit';
 import { building } from '$app/environment';
-import { isCrossSite } from '$lib/server/access';
+import { isCrossSite, isOtherName } from '$lib/server/access';
 import { asProblem, secureHeaders } from '$lib/server/answer';
 import { closeDatabase, database } from '$lib/server/db';
 import { loadDemo } from '$lib/server/db/demo';
@@ -15,23 +15,31 @@ export const init: ServerInit = async () => {
 	if (DEMO === '1') await loadDemo(database());
 };
 
+async function answer(event: RequestEvent, resolve: () => MaybePromise<Response>): Promise<Response> {
+	const { origin } = event.url;
+	if (isOtherName(event.request, event.url)) {
+		return new Response(null, { status: 307, headers: { location: event.url.href } });
+	}
+	if (isCrossSite(event.request, event.url)) {
+		const message = `This was sent from another site. Open ${origin} and send it from there.`;
+		return Response.json({ message }, { status: 403 });
+	}
+	return resolve();
+}
+
 export const handle: Handle = async ({ event, resolve }) => {
-	const { pathname, origin } = event.url;
+	const { pathname } = event.url;
 	// A refusal below /api is for programs: without this Kit would send those that accept all a page.
 	if (pathname.startsWith('/api/')) event.request.headers.set('accept', 'application/json');
-	const response = isCrossSite(event.request, event.url)
-		? Response.json(
-				{ message: `This was sent from another site. Open ${origin} and send it from there.` },
-				{ status: 403 }
-			)
-		: await resolve(event);
-	const answer = await asProblem(pathname, response);
-	secureHeaders(answer.headers, event.url);
-	return answer;
+	const response = await asProblem(pathname, await answer(event, () => resolve(event)));
+	secureHeaders(response.headers, event.url);
+	return response;
 };
 
 export const handleError: HandleServerError = ({ error: cause, event, status, message }) => {
 	const id = crypto.randomUUID().slice(0, 8);
-	logFault({ id, status, method: event.request.method, route: event.route.id, cause });
+	// Below 500 nothing broke, and the message repeats the address, which may carry a code.
+	const fault = status < 500 ? undefined : cause;
+	logFault({ id, status, method: event.request.method, route: event.route.id, cause: fault });
 	return { message, id };
 };

@@ -1,6 +1,6 @@
 import { isHttpError } from '@sveltejs/kit';
 import { describe, expect, it } from 'vitest';
-import { allowPublic, isCrossSite } from './access';
+import { allowPublic, isCrossSite, isOtherName } from './access';
 
 function visitor(address: string) {
 	const headers: Record<string, string> = {};
@@ -64,4 +64,14 @@ describe('isCrossSite', () => {
 		const url = new URL(path, here);
 		expect(isCrossSite(new Request(url, { method, headers }), url)).toBe(expected);
 	});
+});
+
+it.each([
+	['GET', 'localhost:4600', 'http://127.0.0.1:4600/', true],
+	['GET', '127.0.0.1:4600', 'http://127.0.0.1:4600/', false],
+	['POST', 'localhost:4600', 'http://127.0.0.1:4600/', false],
+	['GET', 'localhost:3000', 'http://127.0.0.1:4600/', false],
+	['GET', 'localhost:4600', 'https://filters.example/', false]
+])('isOtherName: %s by %s where %s is the address → %s', (method, host, address, expected) => {
+	expect(isOtherName(new Request(address, { method, headers: { host } }), new URL(address))).toBe(expected);
 });

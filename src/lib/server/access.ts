@@ -44,3 +44,12 @@ export function isCrossSite(request: Request, url: URL): boolean {
 	if (origin !== null) return origin !== url.origin;
 	return !url.pathname.startsWith('/api/') && formTypes.test(request.headers.get('content-type') ?? '');
 }
+
+/**
+ * Whether a page was asked for by the machine's other name: a form on it would count as another site's.
+ * Only on the loopback address; elsewhere names are the business of whoever set ORIGIN.
+ */
+export function isOtherName(request: Request, url: URL): boolean {
+	if (request.method !== 'GET' || url.hostname !== '127.0.0.1') return false;
+	return request.headers.get('host') === `localhost:${url.port}`;
+}

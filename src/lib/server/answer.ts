@@ -37,8 +37,7 @@ const kept = ['allow', 'retry-after', 'set-cookie', 'www-authenticate'];
  * and problems that an endpoint made itself, pass as they are.
  */
 export async function asProblem(pathname: string, response: Response): Promise<Response> {
-	const concerns = pathname === '/api' || pathname.startsWith('/api/');
-	if (!concerns || response.status < 400) return response;
+	if (!pathname.startsWith('/api/') || response.status < 400) return response;
 	if (response.headers.get('content-type')?.startsWith('application/problem+json')) return response;
 	const title = (await messageOf(response)) || reasonPhrase(response.status);
 	const answer = problem(response.status, title);
