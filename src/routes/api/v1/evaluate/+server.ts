@@ -3,6 +3,7 @@ import { evaluate } from '$lib/rules/evaluate';
 import { toAnswer } from '$lib/rules/answer';
 import { allowPublic } from '$lib/server/access';
 import { readJson } from '$lib/server/body';
+import { drained } from '$lib/server/drain';
 import { problem } from '$lib/server/problem';
 import { readDesign } from '$lib/server/sheets';
 import type { RequestHandler } from './$types';
@@ -10,7 +11,7 @@ import type { RequestHandler } from './$types';
 export const POST: RequestHandler = async (event) => {
 	allowPublic(event, { rate: true });
 	const body = await readJson(event.request);
-	if (!body.ok) return body.response;
+	if (!body.ok) return drained(event.request, body.response);
 	const design = readDesign(body.value);
 	if (!design.ok) return problem(400, 'The design cannot be evaluated as it is.', design.issues);
 	return json(toAnswer(evaluate(design.value)));
