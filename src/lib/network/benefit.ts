@@ -4,7 +4,7 @@ import { add, divide, multiply, type Complex } from './complex';
 import { leastRatio, type Ratio } from './extreme';
 import { capacitorImpedance, filterImpedance, type CapacitorPart, type Filter } from './filter';
 import { ladder, type LadderSample } from './ladder';
-import type { SourceModel } from './source';
+import { sourceImpedance, type SourceModel } from './source';
 
 /** A lossless network has no bottom at its resonance; gains are reported no lower than this [dB]. */
 export const LOWEST_GAIN_DB = -200;
@@ -75,6 +75,9 @@ export interface BenefitFinder {
 	readonly worst: (choice: CapacitorPart) => WorstBenefit;
 }
 
+/** Under this square (−40 dB) the ratio of quadratics has lost digits, and the gain is taken from the network itself. */
+const DEEP = 1e-4;
+
 /** |Z_x·Z_f + Z_s·(Z_x + Z_f)|² over |Z_x|²·|Z_f + Z_s|², Z_s = R + jX: the square of |1 + Y_x/Y_p|. */
 const gainRatio = (sample: LadderSample, capacitor: Complex): Ratio => {
 	const { own, resistance } = sample;
@@ -109,8 +112,10 @@ export function benefitFinder(filter: Filter, source: SourceModel, range: Interv
 	return {
 		worst: (choice) => {
 			const { square, frequency, reactance } = leastRatio(network, choice, gainRatio);
-			if (!network.inductive) return { gain_dB: decibels(square), frequency, inductance: null };
-			return { gain_dB: decibels(square), frequency, inductance: reactance / (2 * Math.PI * frequency) };
+			const inductance = network.inductive ? reactance / (2 * Math.PI * frequency) : null;
+			if (square > DEEP) return { gain_dB: decibels(square), frequency, inductance };
+			const sourceZ = sourceImpedance(source, frequency, inductance ?? undefined);
+			return { gain_dB: benefitAt(filter, sourceZ, choice, frequency), frequency, inductance };
 		}
 	};
 }

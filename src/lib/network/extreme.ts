@@ -125,7 +125,7 @@ const refined = (seen: readonly Least[], least: Least, evaluate: (f: number) => 
  * @param objective the ratio
  * @returns least value, where it lies [Hz], and the reactance of the source there [Ω]
  * @throws OutsideCurveError where the capacitor's curve was not measured
- * @example // gain of 48.70 nF at 145 kHz: square 0.0597 (−12.24 dB)
+ * @example // gain of 48.70 nF at 145 kHz: square 0.0598 (−12.23 dB)
  * leastRatio(ladder(filter, source, range), { capacitance: 48.7e-9 }, gainRatio)
  * @see quotient of two quadratics; golden section over the frequency
  */

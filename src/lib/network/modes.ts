@@ -228,7 +228,8 @@ export function most(of: Modes, known = -Infinity): number {
 	const slowest = of.parts[0];
 	if (!slowest) return Math.max(known, of.constant);
 	const stretch = Math.PI / 2 / (slowest.omega > 0 ? slowest.omega : slowest.speed);
-	let best = Math.max(known, of.constant, firstBest(of, stretch));
+	const seen = known === -Infinity ? firstBest(of, stretch) : known;
+	let best = Math.max(seen, of.constant);
 	let looked = 0;
 	for (let index = 0; looked < MOST_STRETCHES; index += 1) {
 		if (everAfter(of, index * stretch) <= best + SHORT * Math.abs(best)) break;

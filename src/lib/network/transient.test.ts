@@ -1,9 +1,13 @@
 import * as fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { Filter } from './filter';
-import { jouleIntegral, switchOn, type Step } from './transient';
+import { jouleIntegral, peakCapacitorVoltage, peakSourceCurrent, type Step } from './transient';
 
 const filter: Filter = { inductor: { inductance: 33e-6 }, capacitor: { capacitance: 4.7e-6 } };
+const switchOn = (...of: Parameters<typeof peakSourceCurrent>) => ({
+	current: peakSourceCurrent(...of),
+	voltage: peakCapacitorVoltage(...of)
+});
 const mains: Step = { voltage: 325.27, inductance: 100e-6, resistance: 0.4 };
 
 /** Closed form of one series circuit: V/Z0·exp(−ζ·acos ζ/√(1 − ζ²)), acosh above ζ = 1, 1/e at ζ = 1. */

@@ -16,14 +16,6 @@ export interface Step {
 	readonly resistance: number;
 }
 
-/** Greatest magnitudes ever after. */
-export interface Peaks {
-	/** Of the source current [A]. */
-	readonly current: number;
-	/** Across the line-side capacitor [V]. */
-	readonly voltage: number;
-}
-
 const trimmed = (of: Polynomial): Polynomial => {
 	let length = of.length;
 	while (length > 1 && of[length - 1] === 0) length -= 1;
@@ -42,11 +34,22 @@ const shuntOf = ({ capacitor, damping }: Filter): { numerator: Polynomial; rest:
 };
 
 /** F and D of I = V·F/D, and M of V_x = V·M/(s·D). */
-const ladderOf = (
+/**
+ * Polynomials of the network in s, lowest power first: source current V·F/D, line-side voltage V·M/(s·D). The roots of
+ * D are the natural frequencies of the network on its source.
+ * @param step height [V], Ls [H], Rs [Ω]
+ * @param choice the line-side capacitor
+ * @param filter L, C and damping behind it; null for the line-side capacitor alone
+ * @returns F, D and M
+ * @example // 1 H, 1 Ω, 1 F: D = 1 + s + s²
+ * ladderOf({ voltage: 1, inductance: 1, resistance: 1 }, { capacitance: 1 }, null).D // [1, 1, 1]
+ * @see nodal analysis in s
+ */
+export function ladderOf(
 	step: Step,
 	choice: CapacitorPart,
 	filter: Filter | null
-): { F: Polynomial; D: Polynomial; M: Polynomial } => {
+): { F: Polynomial; D: Polynomial; M: Polynomial } {
 	const own = [1, choice.capacitance * (choice.esr ?? 0)];
 	const series = [step.resistance, step.inductance];
 	if (!filter) {
@@ -60,36 +63,51 @@ const ladderOf = (
 	const F = plus(product([choice.capacitance], branch), product(rest, own));
 	const M = product(own, branch);
 	return { F: trimmed(F), M: trimmed(M), D: trimmed(plus(product(series, [0, ...F]), M)) };
-};
+}
 
 const peakOf = (modes: Modes): number => most(opposite(modes), most(modes));
 
-/**
- * Peaks after a step into the discharged network: largest |source current| and largest |voltage across Cx|.
- * Winding and series resistances count; the capacitors' inductances and the winding's capacitance do not.
- * @param step height [V], Ls [H], Rs [Ω]
- * @param choice the line-side capacitor
- * @param filter L, C and damping behind it; null for the line-side capacitor alone
- * @returns peak current [A] and peak voltage [V], no more than 4e-6 of themselves short; Infinity [A] where nothing
- * limits the current
- * @throws RangeError when a value is negative or not finite
- * @example // 325.27 V, 100 µH, 0.4 Ω, 470 nF, behind it 33 µH and 4.7 µF: 61.81 A, 606.9 V
- * switchOn({ voltage: 325.27, inductance: 1e-4, resistance: 0.4 }, { capacitance: 470e-9 }, filter)
- * @see Heaviside's expansion theorem; agrees with ngspice to 0.1 % in tests/reference
- */
-export function switchOn(step: Step, choice: CapacitorPart, filter: Filter | null): Peaks {
+const checked = (step: Step, choice: CapacitorPart): void => {
 	for (const value of [step.voltage, step.inductance, step.resistance, choice.capacitance])
 		if (!(value >= 0) || !Number.isFinite(value))
 			throw new RangeError(`the step needs finite values ≥ 0, got ${value}`);
-	const { F, D, M } = ladderOf(step, choice, filter);
-	const poles = rootsOf(D);
-	const bounded = F.length < D.length;
-	return {
-		current: bounded
-			? step.voltage * peakOf(impulseModes({ numerator: F, denominator: D, poles }))
-			: Infinity,
-		voltage: step.voltage * peakOf(stepModes({ numerator: M, denominator: D, poles }))
-	};
+};
+
+/**
+ * Peak of the source current after a step into the discharged network. Winding and series resistances count; the
+ * capacitors' inductances and the winding's capacitance do not.
+ * @param step height [V], Ls [H], Rs [Ω]
+ * @param choice the line-side capacitor
+ * @param filter L, C and damping behind it; null for the line-side capacitor alone
+ * @returns largest |current| [A], no more than 4e-6 of itself short; Infinity where nothing limits it
+ * @throws RangeError when a value is negative or not finite
+ * @example // 325.27 V, 100 µH, 0.4 Ω, 470 nF, behind it 33 µH and 4.7 µF: 61.81 A
+ * peakSourceCurrent({ voltage: 325.27, inductance: 1e-4, resistance: 0.4 }, { capacitance: 470e-9 }, filter)
+ * @see Heaviside's expansion theorem; agrees with ngspice to 0.1 % in tests/reference
+ */
+export function peakSourceCurrent(step: Step, choice: CapacitorPart, filter: Filter | null): number {
+	checked(step, choice);
+	const { F, D } = ladderOf(step, choice, filter);
+	if (F.length >= D.length) return Infinity;
+	return step.voltage * peakOf(impulseModes({ numerator: F, denominator: D, poles: rootsOf(D) }));
+}
+
+/**
+ * Peak of the voltage across the line-side capacitor after a step into the discharged network; the same network as
+ * for the current.
+ * @param step height [V], Ls [H], Rs [Ω]
+ * @param choice the line-side capacitor
+ * @param filter L, C and damping behind it; null for the line-side capacitor alone
+ * @returns largest |voltage| [V], no more than 4e-6 of itself short
+ * @throws RangeError when a value is negative or not finite
+ * @example // 325.27 V, 100 µH, 0.4 Ω, 470 nF, behind it 33 µH and 4.7 µF: 606.9 V
+ * peakCapacitorVoltage({ voltage: 325.27, inductance: 1e-4, resistance: 0.4 }, { capacitance: 470e-9 }, filter)
+ * @see Heaviside's expansion theorem; agrees with ngspice to 0.1 % in tests/reference
+ */
+export function peakCapacitorVoltage(step: Step, choice: CapacitorPart, filter: Filter | null): number {
+	checked(step, choice);
+	const { D, M } = ladderOf(step, choice, filter);
+	return step.voltage * peakOf(stepModes({ numerator: M, denominator: D, poles: rootsOf(D) }));
 }
 
 /**
