@@ -1,6 +1,7 @@
 /** Writes a scene as the drawing commands of a PDF page, in whole hundredths of a millimetre, y down. */
 import { CAP_RATIO, normaliseText, textWidth } from '$lib/scene/metrics';
 import type { Face, Item, PathItem, Scene, Stroke, TextItem } from '$lib/scene/scene';
+import { repeatedLines } from './pdf-runs';
 
 /** Points of 1/72 inch in a millimetre. */
 export const POINTS_PER_MM = 72 / 25.4;
@@ -111,10 +112,16 @@ const paintOf = ({ stroke, fill, fillRule }: PathItem): string => {
 	return (stroke === undefined ? 'f' : 'B') + rule;
 };
 
+const isLines = ({ d: { ops }, fill, stroke }: PathItem): boolean =>
+	fill === undefined && stroke !== undefined && ops.length >= 8 && /^(?:ML)+$/.test(ops);
+
+const drawn = (item: PathItem): string =>
+	isLines(item) ? repeatedLines(item.d.at, unit) : `${outline(item)}${paintOf(item)}\n`;
+
 const path = (item: PathItem, pen: Pen): string =>
 	(item.fill === undefined ? '' : pen.fill(item.fill)) +
 	(item.stroke === undefined ? '' : pen.stroke(item.stroke)) +
-	`${outline(item)}${paintOf(item)}\n`;
+	drawn(item);
 
 const anchors = { start: 0, middle: 0.5, end: 1 } as const;
 
@@ -147,7 +154,7 @@ const mark = (item: Item, pen: Pen, encode: Encode): string => {
  * Writes a scene as a page's content.
  * @param scene the drawing [mm]
  * @param encode turns a text into the codes of its face
- * @returns PDF operators; one painting operator for each path and text
+ * @returns PDF operators; a painting operator for each path and text, or one for each line of a repeated pattern
  * @example pageContent(scene, encode).startsWith('.0283465 0 0 -.0283465 0 595.2756 cm') // true for A4 landscape
  * Source: PDF Reference 1.4, chapters 4 and 5; the limit of mitres is SVG's.
  */

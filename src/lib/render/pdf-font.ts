@@ -85,28 +85,40 @@ const utf16 = (code: number): string => {
 	return Array.from({ length: text.length }, (_, index) => hex(text.charCodeAt(index))).join('');
 };
 
+/** Runs of consecutive glyphs with consecutive code points: first glyph, last glyph, first code point. */
+const rangesOf = (characters: ReadonlyMap<number, number>): [number, number, number][] => {
+	const ranges: [number, number, number][] = [];
+	for (const [code, glyph] of [...characters].sort(([, a], [, b]) => a - b)) {
+		const range = ranges.at(-1);
+		const continues = range !== undefined && range[1] === glyph - 1 && range[2] - range[0] === code - glyph;
+		// Within a range only the last byte may change, on both sides.
+		if (continues && (glyph & 0xff) !== 0 && (code & 0xff) !== 0) range[1] = glyph;
+		else ranges.push([glyph, glyph, code]);
+	}
+	return ranges;
+};
+
 /**
  * Writes the map from glyphs back to Unicode.
  * @param characters glyph of each code point
  * @returns the CMap as text
- * @example toUnicode(new Map([[0x3a9, 1]])).includes('<0001> <03A9>') // true
+ * @example toUnicode(new Map([[0x3a9, 1]])).includes('<0001><0001><03A9>') // true
  * Source: PDF Reference 1.4, 5.9.2; Adobe Technical Note 5411.
  */
 export function toUnicode(characters: ReadonlyMap<number, number>): string {
-	const lines = [...characters]
-		.sort(([, a], [, b]) => a - b)
-		.map(([code, glyph]) => `<${hex(glyph)}> <${utf16(code)}>`);
-	const blocks: string[] = [];
+	const lines = rangesOf(characters).map(
+		([first, last, code]) => `<${hex(first)}><${hex(last)}><${utf16(code)}>`
+	);
+	let blocks = '';
 	for (let start = 0; start < lines.length; start += 100) {
 		const block = lines.slice(start, start + 100);
-		blocks.push(`${String(block.length)} beginbfchar\n${block.join('\n')}\nendbfchar\n`);
+		blocks += `${String(block.length)} beginbfrange\n${block.join('\n')}\nendbfrange\n`;
 	}
 	return (
 		'/CIDInit /ProcSet findresource begin\n12 dict begin\nbegincmap\n' +
 		'/CIDSystemInfo << /Registry (Adobe) /Ordering (UCS) /Supplement 0 >> def\n' +
 		'/CMapName /Adobe-Identity-UCS def\n/CMapType 2 def\n' +
-		'1 begincodespacerange\n<0000> <FFFF>\nendcodespacerange\n' +
-		blocks.join('') +
+		`1 begincodespacerange\n<0000><FFFF>\nendcodespacerange\n${blocks}` +
 		'endcmap\nCMapName currentdict /CMap defineresource pop\nend\nend\n'
 	);
 }

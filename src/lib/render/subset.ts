@@ -57,9 +57,9 @@ const bareOutline = (outline: Uint8Array, newGlyph: ReadonlyMap<number, number>)
 	return bare;
 };
 
-/** `.notdef`, the glyphs asked for in their old order, then what they are composed of. */
-const closureOf = (face: TrueType, wanted: Iterable<number>): number[] => {
-	const glyphs = new Set([0, ...[...new Set(wanted)].sort((a, b) => a - b)]);
+/** `.notdef`, the glyphs asked for in the order of their code points, then what they are composed of. */
+const closureOf = (face: TrueType, wanted: CharacterMap): number[] => {
+	const glyphs = new Set([0, ...[...wanted].sort(([a], [b]) => a - b).map(([, glyph]) => glyph)]);
 	for (const glyph of glyphs) {
 		for (const component of componentsOf(face.outlineOf(glyph))) glyphs.add(component.glyph);
 	}
@@ -161,7 +161,7 @@ export function subsetFace(
 	characters: CharacterMap,
 	extra: (characters: CharacterMap) => Readonly<Record<string, Uint8Array>> = () => ({})
 ): Subset {
-	const glyphs = closureOf(face, characters.values());
+	const glyphs = closureOf(face, characters);
 	const newGlyph = new Map(glyphs.map((glyph, index) => [glyph, index]));
 	const renumbered = new Map(
 		[...characters].sort(([a], [b]) => a - b).map(([code, glyph]) => [code, newGlyph.get(glyph) ?? 0])

@@ -18,17 +18,20 @@ const tables: Readonly<Record<Face, ReadonlyMap<string, number>>> = {
 	bold: tableOf(WIDTHS.bold)
 };
 
-/** Twins: micro and mu, hyphens, and spaces that must not break. */
+/** Spellings that the faces write with another character. */
 const twins: Readonly<Record<string, string>> = {
 	'\u03bc': '\u00b5',
 	'\u2011': '-',
-	'\u2009': '\u00a0',
-	'\u202f': '\u00a0'
+	'\u2002': '\u00a0\u00a0',
+	'\u2003': '\u00a0\u00a0\u00a0\u00a0',
+	'\t': ' ',
+	'\n': ' ',
+	'\r': ' '
 };
 
 /**
  * Writes one character for what may come as either of two: U+2126 becomes Ω, U+03BC becomes µ, letters with marks
- * become one character, narrow spaces become no-break spaces.
+ * become one character, typographic spaces become no-break spaces (an en space two, an em space four), line ends a space.
  * @param text any text
  * @returns the text as it is measured and drawn
  * @example normaliseText('10 k\u2126') // '10 kΩ' with U+03A9
@@ -37,7 +40,9 @@ const twins: Readonly<Record<string, string>> = {
 export function normaliseText(text: string): string {
 	// Plain ASCII is most of a sheet and is in its final form.
 	if (/^[ -~]*$/.test(text)) return text;
-	return text.normalize('NFC').replace(/[\u03bc\u2011\u2009\u202f]/g, (twin) => twins[twin] ?? twin);
+	return text
+		.normalize('NFC')
+		.replace(/[\u03bc\u2000-\u200a\u2011\u202f\t\n\r]/g, (twin) => twins[twin] ?? '\u00a0');
 }
 
 /**

@@ -44,7 +44,7 @@ const woffOf = (file: Uint8Array): Uint8Array => {
 	const count = source.getUint16(4);
 	const heading = new Uint8Array(44 + 20 * count);
 	const view = viewOf(heading);
-	const parts = [heading];
+	const parts: Uint8Array[] = [heading];
 	let at = heading.length;
 	for (let index = 0; index < count; index += 1) {
 		const entry = 12 + 16 * index;
