@@ -1,5 +1,5 @@
 /** Programs from Debian's packages: found, or installed where that is allowed. */
-import { accessSync, constants, existsSync, mkdirSync, writeFileSync } from 'node:fs';
+import { accessSync, constants, existsSync, mkdirSync, rmSync, writeFileSync } from 'node:fs';
 import { delimiter, join } from 'node:path';
 import { postgresBinaries } from './cluster.mjs';
 import { Halt, must } from './run.mjs';
@@ -48,12 +48,22 @@ export const toTest = {
 /** @param {Packages} packages */
 const missingOf = (packages) => Object.keys(packages).filter((name) => !packages[name]?.());
 
-/** Debian would start a server of its own on the usual port; ours has its own data and port. */
-function keepMainClusterAway() {
+/**
+ * Does something while Debian makes no server of its own: it would start one on the usual port, and ours
+ * has its own data and port. The setting is taken back, for whoever installs another version later.
+ *
+ * @param {() => Promise<unknown>} work
+ */
+async function withoutMainCluster(work) {
 	const folder = '/etc/postgresql-common/createcluster.d';
-	if (existsSync('/etc/postgresql-common/createcluster.conf')) return;
+	const file = join(folder, 'herringbone.conf');
 	mkdirSync(folder, { recursive: true });
-	writeFileSync(join(folder, 'herringbone.conf'), 'create_main_cluster = false\n');
+	writeFileSync(file, 'create_main_cluster = false\n');
+	try {
+		await work();
+	} finally {
+		rmSync(file, { force: true });
+	}
 }
 
 /**
@@ -70,11 +80,10 @@ export async function ensurePackages(packages) {
 		throw new Halt(`Missing: ${names}. Install with: sudo apt-get install ${names}`);
 	}
 	console.log(`Installing ${names} …`);
-	if (missing.includes('postgresql')) keepMainClusterAway();
 	const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive' };
 	await must('read the list of packages', 'apt-get', ['update', '-qq'], { env });
 	const install = ['install', '-y', '-qq', '--no-install-recommends', ...missing];
-	await must(`install ${names}`, 'apt-get', install, { env });
+	await withoutMainCluster(() => must(`install ${names}`, 'apt-get', install, { env }));
 	const still = missingOf(packages);
 	if (still.length > 0) throw new Halt(`Installed, but still not found: ${still.join(' ')}.`);
 }
