@@ -1,5 +1,6 @@
 /** The peak of the current that rushes in at switch-on. */
 import type { Design, ImpedanceSource, InrushCurrentRule, Supply } from '$lib/design/design';
+import { peakSourceCurrent } from '$lib/network/transient';
 import { capacitorPart, filterOf } from './circuit';
 import type { Finding, Formula } from './finding';
 import { computed, given, parts, symbol } from './formula';
@@ -8,7 +9,6 @@ import type { Method } from './method';
 import { evaluated, notEvaluated } from './outcome';
 import { scanBands } from './scan';
 import { limitingCapacitance } from './series-circuit';
-import { switchOnPeak } from './switch-on';
 import { toleranceInterval } from './tolerance';
 import { bandsParts, plain } from './wording';
 
@@ -69,11 +69,11 @@ const wholeNetwork = (design: Design, rule: InrushCurrentRule, source: Impedance
 		}
 	};
 	const voltage = stepVoltage(design.supply);
-	const step = { voltage, inductance: source.inductanceMin_H, resistance: source.resistance_ohm, filter };
+	const step = { voltage, inductance: source.inductanceMin_H, resistance: source.resistance_ohm };
 	const { curve: _, ...unmeasured } = design.choice;
 	const bands = scanBands(
 		(capacitance) =>
-			switchOnPeak({ ...step, choice: capacitorPart(design, unmeasured, capacitance) }) / rule.limit_A
+			peakSourceCurrent(step, capacitorPart(design, unmeasured, capacitance), filter) / rule.limit_A
 	);
 	const cause = `Inrush of Cx and C above ${plain(rule.limit_A, 'current')} from ${source.label}`;
 	return evaluated(rule, INRUSH_CURRENT, {

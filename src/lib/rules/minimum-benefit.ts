@@ -9,7 +9,7 @@ import type { Method } from './method';
 import { evaluated, notEvaluated } from './outcome';
 import { scanBands } from './scan';
 import { bandsParts, plain } from './wording';
-import { nominalResonances } from './worst-capacitance';
+import { resonantCapacitances } from './worst-capacitance';
 
 export const MINIMUM_BENEFIT: Method = {
 	kind: 'minimum-benefit',
@@ -61,7 +61,7 @@ export function minimumBenefit(design: Design, rule: MinimumBenefitRule): Findin
 		const least = finders.reduce((gain, finder) => Math.min(gain, finder.worst(part).gain_dB), Infinity);
 		return 10 ** ((rule.minimum_dB - least) / 20);
 	};
-	const bands = scanBands(ratio, nominalResonances(filter, model, lines));
+	const bands = scanBands(ratio, resonantCapacitances(filter, model, lines));
 	const cause = `Benefit under ${plain(rule.minimum_dB, 'gain')} on ${source.label}`;
 	return evaluated(rule, MINIMUM_BENEFIT, {
 		bands: bands.map((band) => ({ ...band, cause, source: source.id })),

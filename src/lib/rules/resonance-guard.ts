@@ -2,9 +2,10 @@
 import type { Design, ResonanceGuardRule, Source } from '$lib/design/design';
 import type { Filter } from '$lib/network/filter';
 import { approximateWorstCapacitance, cornerFrequency } from '$lib/network/resonance';
-import { asymptoticInductance, type SourceModel } from '$lib/network/source';
+import { asymptoticInductance } from '$lib/network/source';
+import type { FilterBox } from '$lib/network/worst-range';
 import { uniteOpen, type Interval } from '$lib/quantity/interval';
-import { filterOf, partCurves, sourceCurves, sourceModel, uncovered } from './circuit';
+import { filterOf, firstGap, partCurves, sourceCurves, sourceModel } from './circuit';
 import type { Band, Finding, Formula, FormulaPart } from './finding';
 import { computed, given, parts, symbol } from './formula';
 import { linesOf, sourceOf, type Line } from './lines';
@@ -12,7 +13,7 @@ import type { Method } from './method';
 import { evaluated, notEvaluated } from './outcome';
 import { toleranceInterval } from './tolerance';
 import { plain, worded, wordedRange } from './wording';
-import { worstRange, type Box } from './worst-capacitance';
+import { worstRanges } from './worst-capacitance';
 
 export const RESONANCE_GUARD: Method = {
 	kind: 'resonance-guard',
@@ -145,16 +146,11 @@ const approximate = (design: Design, rule: ResonanceGuardRule, source: Source): 
 	});
 };
 
-const boxOf = (design: Design, filter: Filter, source: SourceModel, line: Line): Box => {
-	const { inductor, capacitor } = design;
-	return {
-		filter,
-		inductance: toleranceInterval(inductor.inductance_H, inductor),
-		capacitance: toleranceInterval(capacitor.capacitance_F, capacitor),
-		source,
-		frequency: { from: line.from, to: line.to }
-	};
-};
+const boxOf = (design: Design, filter: Filter): FilterBox => ({
+	filter,
+	inductance: toleranceInterval(design.inductor.inductance_H, design.inductor),
+	capacitance: toleranceInterval(design.capacitor.capacitance_F, design.capacitor)
+});
 
 /** Names the rule of thumb's edges beside a band from which they differ by more than 5 %. */
 const thumbEdgesOf = (
@@ -186,14 +182,12 @@ const measuredParts = ({ inductor, capacitor }: Design): readonly string[] =>
 const exact = (design: Design, rule: ResonanceGuardRule, source: Source): Finding => {
 	const [filter, model] = [filterOf(design), sourceModel(design, source)];
 	const lines = guardedLines(design, rule);
-	const gap = lines
-		.map((line) => uncovered([...partCurves(filter), ...sourceCurves(model)], line))
-		.find((reason) => reason !== null);
-	if (gap !== undefined && gap !== null) return notEvaluated(rule, RESONANCE_GUARD, gap);
-	const ranges = lines.flatMap((line): GuardedRange[] => {
-		const worst = worstRange(boxOf(design, filter, model, line));
-		return worst === null ? [] : [{ line, guard: guardOf(rule, line), worst }];
-	});
+	const gap = firstGap([...partCurves(filter), ...sourceCurves(model)], lines);
+	if (gap !== null) return notEvaluated(rule, RESONANCE_GUARD, gap);
+	const box = boxOf(design, filter);
+	const ranges = lines.flatMap((line) =>
+		worstRanges(box, model, line).map((worst) => ({ line, guard: guardOf(rule, line), worst }))
+	);
 	const bands = ranges.map((range) => bandOf(source, range));
 	return evaluated(rule, RESONANCE_GUARD, {
 		bands,

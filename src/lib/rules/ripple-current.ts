@@ -19,7 +19,7 @@ import type { Method } from './method';
 import { evaluated, notEvaluated } from './outcome';
 import { scanBands } from './scan';
 import { bandsParts, plain } from './wording';
-import { nominalResonances } from './worst-capacitance';
+import { resonantCapacitances } from './worst-capacitance';
 
 export const RIPPLE_CURRENT: Method = {
 	kind: 'ripple-current',
@@ -93,7 +93,7 @@ export function rippleCurrent(design: Design, rule: RippleCurrentRule): Finding 
 	const lines = loadedLines(design, model);
 	const bands = scanBands(
 		(capacitance) => rms(lines, capacitorPart(design, unmeasured, capacitance)) / rule.limit_A,
-		cornersOf(design).flatMap((corner) => nominalResonances(corner, model, linesOf(design)))
+		cornersOf(design).flatMap((corner) => resonantCapacitances(corner, model, linesOf(design)))
 	);
 	const cause = `Ripple current above ${plain(rule.limit_A, 'current')} from ${source.label}`;
 	return evaluated(rule, RIPPLE_CURRENT, {

@@ -1,5 +1,4 @@
 /** Forbidden bands of a quantity that need not rise or fall with Cx: scan, refine, find the edges. */
-import { signChange } from '$lib/network/search';
 import type { Interval } from '$lib/quantity/interval';
 
 /** The scan's ends; beyond them a band goes on to 0 or without end [F]. */
@@ -50,6 +49,27 @@ const refined = (excess: (at: number) => number, coarse: readonly Place[]): Plac
 		return [...between, place];
 	});
 
+/** Edges are found to this ratio of 1 + 10⁻¹¹, as logarithms of capacitance and of excess alike. */
+const SPREAD = 1e-11;
+
+const MOST_ROUNDS = 200;
+
+/** False position with a halved weight for an end that stays, and bisection in every third round. */
+const edgeBetween = (excess: (at: number) => number, left: Place, right: Place): number => {
+	let [low, high] = [left, right];
+	let [lowWeight, highWeight] = [1, 1];
+	for (let round = 1; round < MOST_ROUNDS && high.at - low.at > SPREAD; round += 1) {
+		const [below, above] = [Math.abs(low.excess) * lowWeight, Math.abs(high.excess) * highWeight];
+		const share = round % 3 === 0 ? 0.5 : below / (below + above);
+		const at = low.at + share * (high.at - low.at);
+		const here = { at, excess: excess(at) };
+		if (Math.abs(here.excess) < SPREAD) return at;
+		if (here.excess > 0 === left.excess > 0) [low, lowWeight, highWeight] = [here, 1, highWeight / 2];
+		else [high, lowWeight, highWeight] = [here, lowWeight / 2, 1];
+	}
+	return (low.at + high.at) / 2;
+};
+
 /**
  * Finds the capacitances at which a quantity exceeds its limit, from 1 pF to 100 mF with 40 points a decade wherever
  * it may cross, the edges found to the last digits; a band at an end of the scan goes on beyond it.
@@ -67,7 +87,7 @@ export function scanBands(ratio: (capacitance: number) => number, extra: readonl
 	places.forEach((place, index) => {
 		const left = places[index - 1];
 		if (left === undefined || left.excess > 0 === place.excess > 0) return;
-		const edge = Math.exp(signChange(excess, left.at, place.at));
+		const edge = Math.exp(edgeBetween(excess, left, place));
 		if (from === null) {
 			from = edge;
 		} else {
