@@ -87,7 +87,9 @@ export class PathBuilder {
 			x + radiusX * u * cos - radiusY * v * sin,
 			y + radiusX * u * sin + radiusY * v * cos
 		];
-		this.lineTo(...place(Math.cos(start), Math.sin(start)));
+		const [x0, y0] = place(Math.cos(start), Math.sin(start));
+		// No line of no length where the arc starts at the present point.
+		if (this.#ops === '' || Math.hypot(x0 - this.#x, y0 - this.#y) > 1e-6) this.lineTo(x0, y0);
 		const sweep = sweepOf(start, end, anticlockwise);
 		const parts = Math.ceil(Math.abs(sweep) / QUARTER - 1e-9);
 		const step = parts === 0 ? 0 : sweep / parts;
