@@ -1,13 +1,15 @@
 /** The plot's border, ticks and numerals; frequencies stand above where the benefit pane takes the foot. */
 import { formatQuantity } from '$lib/quantity/format';
+import { textWidth } from '$lib/scene/metrics';
 import type { Item } from '$lib/scene/scene';
 import { capOf, penOf, type Board } from './board';
+import { orientedAt, type Oriented } from './oriented';
 import { lettered, rectangle, ruled } from './pen';
 import { xOf, yOf } from './plot';
 
 /** Outside the border, at k = 1 [mm]. */
 const TICK = 1.2;
-const NUMERAL_GAP = 0.7;
+const NUMERAL_GAP = 0.5;
 
 /**
  * Lists the powers of ten from one value to another, both included.
@@ -49,6 +51,24 @@ const frequencyNumerals = (board: Board): Item[] => {
 	return [ruled(ticks, penOf(board, 'tick')), ...numerals, symbol];
 };
 
+/**
+ * Gives the room of the frequency numerals above the chart, which leaders from above stop at.
+ * @param board the chart
+ * @returns none where the numerals stand at the foot
+ * @example numeralBoxes(board).length
+ * Source: sheet design.
+ */
+export function numeralBoxes(board: Board): Oriented[] {
+	const { plot, pane, decimalMark } = board.input;
+	if (pane === null) return [];
+	const cap = capOf(board);
+	const middle = plot.y - (TICK + NUMERAL_GAP) * board.k - cap / 2;
+	return powersOfTen(plot.frequencyFrom, plot.frequencyTo).map((value) => {
+		const width = textWidth(formatQuantity(value, 'frequency', { decimalMark }), 'regular', cap);
+		return orientedAt(xOf(plot, value), middle, [width / 2 + 0.3 * cap, 0.75 * cap], 0);
+	});
+}
+
 const impedanceNumerals = (board: Board): Item[] => {
 	const { plot, decimalMark, ink } = board.input;
 	const { k } = board;
@@ -63,8 +83,8 @@ const impedanceNumerals = (board: Board): Item[] => {
 			anchor: 'end'
 		})
 	);
-	const symbol = lettered('|Z|', right, plot.y + plot.decade / 2 + cap / 2, {
-		cap,
+	const symbol = lettered('|Z|', right, plot.y + plot.decade / 2 + 0.7 * cap, {
+		cap: 1.4 * cap,
 		face: 'bold',
 		fill: ink.ink,
 		anchor: 'end'

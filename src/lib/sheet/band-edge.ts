@@ -2,7 +2,7 @@
 import type { Band, Finding } from '$lib/rules/finding';
 import { closesWindows } from '$lib/rules/windows';
 import { uniteOpen, type Interval } from '$lib/quantity/interval';
-import { capOf, fallsOf, settle, type Board } from './board';
+import { capOf, fallsOf, settleFirst, type Board } from './board';
 import type { Pen } from './ink';
 import { alongSegment, ON_LINE, roomOf, type Label } from './label';
 import { capacitanceLine } from './plot';
@@ -81,8 +81,8 @@ const edgeText = (board: Board, { finding, harmonics }: Edge): string => {
 	return `${number} ${board.input.words.rule[finding.kind]}`;
 };
 
-/** Between an edge and the room of its name [mm]. */
-const BESIDE = 0.15;
+/** Between an edge and the room of its name at k = 1; above the line the room reaches down to the descenders [mm]. */
+const BESIDE = { larger: 0.2, smaller: 0.45 } as const;
 
 const settleEdgeName = (board: Board, edge: Edge): void => {
 	const line = capacitanceLine(board.input.plot, edge.capacitance);
@@ -95,10 +95,11 @@ const settleEdgeName = (board: Board, edge: Edge): void => {
 		fill: edge.finding.class === 'mandatory' ? ink.mandatory : ink.ink,
 		of: edge.finding.rule
 	};
-	const away = roomOf(label)[1] + BESIDE * board.k;
+	const away = roomOf(label)[1] + BESIDE[edge.forbids] * board.k;
 	const beside = edge.forbids === 'larger' ? away : -away;
 	const preferred = edge.forbids === 'larger' ? 0.3 : 0.25;
-	settle(board, label, alongSegment(line, { preferred, beside }));
+	const short = { ...label, text: ruleNumber(board, edge.finding.rule) };
+	settleFirst(board, [label, short], () => alongSegment(line, { preferred, beside }));
 };
 
 /** Half of the room of an edge across [mm]. */

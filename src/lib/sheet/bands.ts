@@ -6,7 +6,7 @@ import { uniteOpen } from '$lib/quantity/interval';
 import type { Item } from '$lib/scene/scene';
 import { edgePen, ruleNumber, type Edge } from './band-edge';
 import { clearOfLabels, fallsOf, penOf, segmentsPath, type Board } from './board';
-import { dotCentres, dotRadius, hatchLines, roundDots } from './hatch';
+import { dotCentres, HATCH_SPECK, dotRadius, hatchLines, roundDots } from './hatch';
 import type { Pen } from './ink';
 import { capacitanceLine } from './plot';
 import { fallStrip, polygonPath, type Polygon } from './polygon';
@@ -41,7 +41,7 @@ const fringeOf = (board: Board, edges: readonly Edge[], strips: readonly Strip[]
 };
 
 const hatchPath = (board: Board, segments: readonly number[], pen: Pen): Item[] => {
-	const clear = clearOfLabels(board, segments);
+	const clear = clearOfLabels(board, segments, HATCH_SPECK * board.k);
 	return clear.length === 0 ? [] : [{ type: 'path', d: segmentsPath(clear), stroke: penOf(board, pen) }];
 };
 

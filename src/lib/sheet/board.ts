@@ -1,10 +1,11 @@
 /** What the parts of the chart share: the input, what this sheet may show of it, and the room that is taken. */
+import type { Design } from '$lib/design/design';
 import type { Finding, Window } from '$lib/rules/finding';
 import type { PathData, Stroke, TextItem } from '$lib/scene/scene';
 import type { ChartInput } from './chart';
 import { strokeOf, type Pen } from './ink';
 import { fieldOf, placeLabel, type Field, type Label, type Place } from './label';
-import { cutAtBoxes } from './oriented';
+import { cutAtBoxes, numberAt } from './oriented';
 import { fallOf } from './plot';
 import { zonesOf, type Zone } from './zones';
 
@@ -33,23 +34,31 @@ export interface Board {
  * Source: build-up steps: parts, then rule by rule, then windows and choice.
  */
 export function boardOf(input: ChartInput): Board {
-	const { design, evaluation, step, plot } = input;
+	const { design, evaluation, step } = input;
 	const all = evaluation?.findings ?? [];
-	const decided = step === null || step >= all.length + 2;
 	const findings = step === null ? all : all.slice(0, Math.max(0, step - 1));
-	const lowest = Math.min(...(design?.switching.map((entry) => entry.frequencyMin_Hz) ?? []));
 	return {
 		input,
 		k: input.k,
-		readAt: Number.isFinite(lowest) ? lowest : null,
+		readAt: lowestFrequency(design),
 		findings,
-		windows: decided ? (evaluation?.windows ?? []) : [],
-		choice: decided ? (design?.choice.capacitance_F ?? null) : null,
+		...decidedOf(input, step === null || step >= all.length + 2),
 		zones: zonesOf(findings),
-		field: fieldOf(plot),
+		field: fieldOf(input.plot),
 		texts: []
 	};
 }
+
+const lowestFrequency = (design: Design | null): number | null =>
+	design === null ? null : Math.min(...design.switching.map((entry) => entry.frequencyMin_Hz));
+
+const decidedOf = (
+	{ design, evaluation }: ChartInput,
+	decided: boolean
+): Pick<Board, 'windows' | 'choice'> => ({
+	windows: decided ? (evaluation?.windows ?? []) : [],
+	choice: decided ? (design?.choice.capacitance_F ?? null) : null
+});
 
 /** Capital height of all that is read at arm's length [mm]. */
 export const capOf = ({ k }: Pick<Board, 'k'>): number => 2.5 * k;
@@ -77,6 +86,23 @@ export function settle(board: Board, label: Label, places: Iterable<Place>): boo
 }
 
 /**
+ * Places a label by its whole text, or by its row's number alone where the whole finds no room.
+ * @param board the chart
+ * @param labels the same label, from its longest text to its shortest
+ * @param places where a text may stand
+ * @returns true where one of them found a place
+ * @example settleFirst(board, [label, { ...label, text: '5.2' }], placesOf)
+ * Source: sheet design.
+ */
+export function settleFirst(
+	board: Board,
+	labels: readonly Label[],
+	places: (label: Label) => Iterable<Place>
+): boolean {
+	return labels.some((label) => settle(board, label, places(label)));
+}
+
+/**
  * Joins segments into one path; a segment that starts where the last one ended goes on with it, so that dashes run on.
  * @param segments x1, y1, x2, y2 of each, one after the other [mm]
  * @returns path data
@@ -84,21 +110,22 @@ export function settle(board: Board, label: Label, places: Iterable<Place>): boo
  * Source: scene format.
  */
 export function segmentsPath(segments: readonly number[]): PathData {
-	const ops: string[] = [];
+	let ops = '';
 	const at: number[] = [];
-	for (let index = 0; index < segments.length; index += 4) {
-		const [x1 = 0, y1 = 0, x2 = 0, y2 = 0] = segments.slice(index, index + 4);
-		const joined = index > 0 && at.at(-2) === x1 && at.at(-1) === y1;
-		if (!joined) {
-			ops.push('M');
-			at.push(x1, y1);
+	let [endX, endY] = [NaN, NaN];
+	for (let index = 0; index + 3 < segments.length; index += 4) {
+		const [x, y] = [numberAt(segments, index), numberAt(segments, index + 1)];
+		if (x !== endX || y !== endY) {
+			ops += 'M';
+			at.push(x, y);
 		}
-		ops.push('L');
-		at.push(x2, y2);
+		[endX, endY] = [numberAt(segments, index + 2), numberAt(segments, index + 3)];
+		ops += 'L';
+		at.push(endX, endY);
 	}
-	return { ops: ops.join(''), at };
+	return { ops, at };
 }
 
 /** Segments with the room of all lettering taken out. */
-export const clearOfLabels = (board: Board, segments: readonly number[]): readonly number[] =>
-	cutAtBoxes(segments, board.field.boxes);
+export const clearOfLabels = (board: Board, segments: readonly number[], speck?: number): readonly number[] =>
+	cutAtBoxes(segments, board.field.boxes, speck);

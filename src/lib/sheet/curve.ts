@@ -65,8 +65,12 @@ const chordPlace = (segments: readonly number[], middle: number, half: number): 
 	return off > BEND ? null : { ...centre, angle: (Math.asin(sin) * 180) / Math.PI };
 };
 
+/** Cost of standing beside the curve instead of on it. */
+const BESIDE_COST = 12;
+
 /**
- * Lists the places on a traced curve where it is straight enough for a label, nearest to the preferred one first.
+ * Lists the places of a traced curve where it is straight enough for a label, nearest to the preferred one first: on
+ * the curve, then below and above it.
  * @param segments the curve [mm]
  * @param label what is to stand on it
  * @param preferred part of the curve's length, 0 … 1
@@ -80,12 +84,22 @@ export function* tracePlaces(
 	preferred: number
 ): Generator<Place, void, undefined> {
 	const count = segments.length / 4;
-	const [half] = roomOf(label);
+	const [half, across] = roomOf(label);
+	const straight: Place[] = [];
 	for (let step = 0; step <= 2 * count; step += 1) {
 		const away = Math.ceil(step / 2);
 		const index = Math.round(preferred * count) + (step % 2 === 0 ? -away : away);
 		const place = index < 0 || index >= count ? null : chordPlace(segments, index, half);
-		if (place !== null) yield { ...place, cost: (10 * away) / count };
+		if (place === null) continue;
+		straight.push({ ...place, cost: (10 * away) / count });
+		yield { ...place, cost: (10 * away) / count };
+	}
+	for (const place of straight) {
+		const turn = (place.angle * Math.PI) / 180;
+		for (const beside of [across + BEND, -across - BEND]) {
+			const [dx, dy] = [-beside * Math.sin(turn), beside * Math.cos(turn)];
+			yield { ...place, x: place.x + dx, y: place.y + dy, cost: BESIDE_COST + place.cost };
+		}
 	}
 }
 

@@ -20,6 +20,9 @@ export type Density = 'bank' | 'field' | 'fringe';
 
 const EVERY: Readonly<Record<Density, number>> = { bank: 1, field: 5, fringe: 2 };
 
+/** Shorter pieces of hatch between lettering and an edge look like a dotted line and are left out [mm]. */
+export const HATCH_SPECK = 1.2;
+
 /** A chord shorter than this prints as a speck [mm]. */
 const SPECK = 0.15;
 

@@ -4,18 +4,24 @@ import { formatQuantity } from '$lib/quantity/format';
 import { textWidth } from '$lib/scene/metrics';
 import type { Item } from '$lib/scene/scene';
 import { capOf, penOf, type Board } from './board';
+import { numeralBoxes } from './axes';
 import { joinRange } from './edge';
 import { NEVER } from './label';
+import { cutAtBoxes } from './oriented';
 import { lettered, rectangle, ruled } from './pen';
 import { xOf } from './plot';
 
-/** Above the plot at k = 1: baseline of the row, lower where no numerals stand between [mm]. */
+/** Above the plot at k = 1: baseline of the row where no numerals stand between [mm]. */
 const ROW = 2.6;
-const ROW_ABOVE_NUMERALS = 5.6;
+/** Baseline of the row above the numerals at k = 1 [mm]. */
+export const HEADER_ROW = 5.6;
 const ELBOW = 1.2;
 const GAP = 1;
 
-const rowHeight = (board: Board): number => (board.input.pane === null ? ROW : ROW_ABOVE_NUMERALS) * board.k;
+const rowHeight = (board: Board): number => (board.input.pane === null ? ROW : HEADER_ROW) * board.k;
+
+const centreOf = ({ frequencyMin_Hz, frequencyMax_Hz }: Switching): number =>
+	Math.sqrt(frequencyMin_Hz * frequencyMax_Hz);
 
 interface Taken {
 	readonly from: number;
@@ -63,52 +69,83 @@ interface Heading {
 	readonly taken: Taken;
 }
 
+interface Wording {
+	/** Index of the symbol f. */
+	readonly sub: string;
+	/** Empty where only the symbol finds room. */
+	readonly value: string;
+}
+
+/** Widths of symbol, index and value, and where each starts from the left end [mm]. */
+const measured = ({ k }: Board, { sub, value }: Wording): { sub: number; value: number; width: number } => {
+	const afterSymbol = textWidth('f', 'bold', 3.5 * k) + 0.3 * k;
+	const afterSub = afterSymbol + textWidth(sub, 'semibold', 2.5 * k);
+	if (value === '') return { sub: afterSymbol, value: afterSub, width: afterSub };
+	const start = afterSub + 1.6 * k;
+	return { sub: afterSymbol, value: start, width: start + textWidth(value, 'bold', 3.5 * k) };
+};
+
+/** The leader from the lettering down to the band, broken at a numeral of the axis. */
+const leader = (board: Board, x: number, elbow: number): Item => {
+	const { plot } = board.input;
+	const level = plot.y - rowHeight(board) - 1.25 * board.k;
+	return ruled(
+		cutAtBoxes([elbow, level, x, level, x, level, x, plot.y], numeralBoxes(board)),
+		penOf(board, 'switching')
+	);
+};
+
+const headingAt = (board: Board, wording: Wording, left: number): Item[] => {
+	const { plot, ink } = board.input;
+	const { k } = board;
+	const y = plot.y - rowHeight(board);
+	const starts = measured(board, wording);
+	const style = { fill: ink.ink, face: 'bold', cap: 3.5 * k } as const;
+	return [
+		lettered('f', left, y, style),
+		lettered(wording.sub, left + starts.sub, y + 0.75 * k, { ...style, face: 'semibold', cap: 2.5 * k }),
+		...(wording.value === '' ? [] : [lettered(wording.value, left + starts.value, y, style)])
+	];
+};
+
+const wordingsOf = (board: Board, entry: Switching): Wording[] => {
+	const entries = board.input.design?.switching ?? [];
+	const sub = entries.length > 1 ? `sw${String(1 + entries.indexOf(entry))}` : 'sw';
+	return [
+		{ sub, value: valueOf(board, entry) },
+		{ sub, value: '' }
+	];
+};
+
 /** Symbol with its index, and the value where there is room for it; null where even the symbol finds none. */
 const headingOf = (board: Board, entry: Switching, taken: readonly Taken[]): Heading | null => {
-	const { plot, ink, design } = board.input;
+	const { plot } = board.input;
 	const { k } = board;
-	const x = xOf(plot, Math.sqrt(entry.frequencyMin_Hz * entry.frequencyMax_Hz));
-	const index =
-		(design?.switching.length ?? 1) > 1 ? String(1 + (design?.switching.indexOf(entry) ?? 0)) : '';
-	const sub = `sw${index}`;
-	const caps = { symbol: 3.5 * k, sub: 2.5 * k };
-	const symbolWidth = textWidth('f', 'bold', caps.symbol);
-	const subWidth = textWidth(sub, 'semibold', caps.sub);
-	const y = plot.y - rowHeight(board);
-	for (const value of [valueOf(board, entry), '']) {
-		const valueWidth = value === '' ? 0 : textWidth(value, 'bold', caps.symbol) + 1.6 * k;
-		const width = symbolWidth + 0.3 * k + subWidth + valueWidth;
-		for (const left of [x - ELBOW * k - 0.8 * k - width, x + (ELBOW + 0.8) * k]) {
-			const span = { from: left, to: left + width };
-			if (left < plot.x - 12 * k || span.to > plot.x + plot.width || !free(taken, span)) continue;
-			const style = { fill: ink.ink, face: 'bold' } as const;
-			const elbow = left < x ? x - ELBOW * k : x + ELBOW * k;
-			const level = y - 1.25 * k;
-			return {
-				taken: { from: Math.min(left, x), to: Math.max(span.to, x) },
-				items: [
-					ruled([elbow, level, x, level, x, level, x, plot.y], penOf(board, 'switching')),
-					lettered('f', left, y, { ...style, cap: caps.symbol }),
-					lettered(sub, left + symbolWidth + 0.3 * k, y + 0.75 * k, {
-						...style,
-						face: 'semibold',
-						cap: caps.sub
-					}),
-					...(value === ''
-						? []
-						: [lettered(value, span.to - valueWidth + 1.6 * k, y, { ...style, cap: caps.symbol })])
-				]
-			};
-		}
-	}
-	return null;
+	const x = xOf(plot, centreOf(entry));
+	const away = (ELBOW + 0.8) * k;
+	const places = wordingsOf(board, entry).flatMap((wording) => {
+		const { width } = measured(board, wording);
+		return [
+			{ wording, side: -1, span: { from: x - away - width, to: x - away } },
+			{ wording, side: 1, span: { from: x + away, to: x + away + width } }
+		];
+	});
+	const place = places.find(
+		({ span }) => span.from >= plot.x - 12 * k && span.to <= plot.x + plot.width && free(taken, span)
+	);
+	if (place === undefined) return null;
+	const { wording, side, span } = place;
+	return {
+		taken: { from: Math.min(span.from, x), to: Math.max(span.to, x) },
+		items: [leader(board, x, x + side * ELBOW * k), ...headingAt(board, wording, span.from)]
+	};
 };
 
 const harmonicTicks = (board: Board, entry: Switching, taken: Taken[]): Item[] => {
 	const { plot, ink } = board.input;
 	const { k } = board;
 	const cap = capOf(board);
-	const centre = Math.sqrt(entry.frequencyMin_Hz * entry.frequencyMax_Hz);
+	const centre = centreOf(entry);
 	const ticks: number[] = [];
 	const numerals: Item[] = [];
 	const y = plot.y - rowHeight(board);
@@ -135,7 +172,7 @@ const harmonicTicks = (board: Board, entry: Switching, taken: Taken[]): Item[] =
  */
 export function headerItems(board: Board): Item[] {
 	const entries = (board.input.design?.switching ?? []).filter((entry) =>
-		inside(board, xOf(board.input.plot, Math.sqrt(entry.frequencyMin_Hz * entry.frequencyMax_Hz)))
+		inside(board, xOf(board.input.plot, centreOf(entry)))
 	);
 	const taken: Taken[] = [];
 	const headings = entries.flatMap((entry) => {

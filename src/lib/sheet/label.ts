@@ -54,6 +54,8 @@ export interface Placed {
 
 /** Cost of what must not happen. */
 export const NEVER = 1000;
+/** Cost of leaving the field, which no label does. */
+const OUTSIDE = Infinity;
 /** Cost of lying on another line, which then stops at the label. */
 export const ON_LINE = 60;
 /** A label stands this clear of what it stops or stands beside, at cap height 2.5 [mm]. */
@@ -94,7 +96,7 @@ const costOfCurves = (field: Field, box: Oriented): number => {
 };
 
 const costOf = (field: Field, box: Oriented): number => {
-	if (leaves(field.room, box)) return 2 * NEVER;
+	if (leaves(field.room, box)) return OUTSIDE;
 	const falling = Math.abs(box.sin - box.cos) * box.along + Math.abs(box.cos + box.sin) * box.across;
 	const rising = Math.abs(box.cos + box.sin) * box.along + Math.abs(box.cos - box.sin) * box.across;
 	let cost =
@@ -152,7 +154,7 @@ const itemAt = (label: Label, { x, y, angle }: Place): TextItem => {
 export function placeLabel(field: Field, label: Label, places: Iterable<Place>): Placed | null {
 	const half = roomOf(label);
 	let best: { place: Place; box: Oriented } | null = null;
-	let least = label.always === true ? Infinity : NEVER;
+	let least = label.always === true ? OUTSIDE : NEVER;
 	for (const place of places) {
 		if (place.cost >= least) break;
 		const box = boxAt(half, label, place);
@@ -202,6 +204,9 @@ export function* alongSegment(
 	}
 }
 
+/** How far a level label may leave the height of its point, in halves of its own height. */
+const ROUNDS = 5;
+
 /**
  * Lists level places around a point: right, left, above and below, ever further.
  * @param x the point [mm]
@@ -218,16 +223,16 @@ export function* aroundPoint(
 	[along, across]: readonly [number, number],
 	gap: number
 ): Generator<Place, void, undefined> {
-	for (const [round, away] of [gap, gap + across, gap + 2 * across].entries()) {
+	const side = along + gap;
+	for (let round = 0; round < ROUNDS; round += 1) {
+		const rise = round * across;
 		const spots = [
-			[along + away, 0],
-			[-along - away, 0],
-			[along + away, -across],
-			[along + away, across],
-			[0, -across - away],
-			[0, across + away],
-			[-along - away, -across],
-			[-along - away, across]
+			[side, rise],
+			[-side, rise],
+			[side, -rise],
+			[-side, -rise],
+			[0, across + gap + rise],
+			[0, -across - gap - rise]
 		];
 		for (const [index, [dx = 0, dy = 0]] of spots.entries())
 			yield { x: x + dx, y: y + dy, angle: 0, cost: 10 * round + index };

@@ -62,6 +62,9 @@ export function overlapping(a: Oriented, b: Oriented): boolean {
 	return !separated(a, b) && !separated(b, a);
 }
 
+/** A number of a flat list; 0 past its end, which no caller reaches. */
+export const numberAt = (numbers: readonly number[], index: number): number => numbers[index] ?? 0;
+
 /** Parameters of the two ends of what lies inside, of a segment given by its start and its way. */
 type Inside = readonly [from: number, to: number];
 
@@ -73,10 +76,10 @@ const slab = (start: number, step: number, half: number): Inside | null => {
 };
 
 const insideOf = (box: Oriented, segments: readonly number[], index: number): Inside | null => {
-	const x = segments[index] ?? 0;
-	const y = segments[index + 1] ?? 0;
-	const dx = (segments[index + 2] ?? 0) - x;
-	const dy = (segments[index + 3] ?? 0) - y;
+	const x = numberAt(segments, index);
+	const y = numberAt(segments, index + 1);
+	const dx = numberAt(segments, index + 2) - x;
+	const dy = numberAt(segments, index + 3) - y;
 	const u = (x - box.x) * box.cos + (y - box.y) * box.sin;
 	const v = (y - box.y) * box.cos - (x - box.x) * box.sin;
 	const first = slab(u, dx * box.cos + dy * box.sin, box.along);
@@ -88,10 +91,10 @@ const insideOf = (box: Oriented, segments: readonly number[], index: number): In
 };
 
 const apart = (box: Oriented, segments: readonly number[], index: number): boolean => {
-	const x1 = (segments[index] ?? 0) - box.x;
-	const y1 = (segments[index + 1] ?? 0) - box.y;
-	const x2 = (segments[index + 2] ?? 0) - box.x;
-	const y2 = (segments[index + 3] ?? 0) - box.y;
+	const x1 = numberAt(segments, index) - box.x;
+	const y1 = numberAt(segments, index + 1) - box.y;
+	const x2 = numberAt(segments, index + 2) - box.x;
+	const y2 = numberAt(segments, index + 3) - box.y;
 	return (
 		(x1 > box.spanX && x2 > box.spanX) ||
 		(x1 < -box.spanX && x2 < -box.spanX) ||
@@ -118,48 +121,59 @@ export function crosses(box: Oriented, segments: readonly number[]): boolean {
 /** Left over from a cut shorter than this, a piece of line prints as a speck [mm]. */
 const SPECK = 0.2;
 
-const pushPiece = (
-	pieces: number[],
-	segments: readonly number[],
-	index: number,
-	[from, to]: Inside
-): void => {
-	const x = segments[index] ?? 0;
-	const y = segments[index + 1] ?? 0;
-	const dx = (segments[index + 2] ?? 0) - x;
-	const dy = (segments[index + 3] ?? 0) - y;
-	if (to - from < 1 && (to - from) * Math.hypot(dx, dy) < SPECK) return;
-	const ends = from === 0 ? [x, y] : [x + from * dx, y + from * dy];
-	pieces.push(...ends);
-	if (to === 1) pieces.push(segments[index + 2] ?? 0, segments[index + 3] ?? 0);
+interface Piece {
+	readonly segments: readonly number[];
+	readonly index: number;
+	readonly speck: number;
+}
+
+const pushPiece = (pieces: number[], { segments, index, speck }: Piece, [from, to]: Inside): void => {
+	const x = numberAt(segments, index);
+	const y = numberAt(segments, index + 1);
+	const [endX, endY] = [numberAt(segments, index + 2), numberAt(segments, index + 3)];
+	const [dx, dy] = [endX - x, endY - y];
+	if (to - from < 1 && (to - from) * Math.hypot(dx, dy) < speck) return;
+	if (from === 0) pieces.push(x, y);
+	else pieces.push(x + from * dx, y + from * dy);
+	if (to === 1) pieces.push(endX, endY);
 	else pieces.push(x + to * dx, y + to * dy);
 };
 
-const cutOne = (segments: readonly number[], box: Oriented): readonly number[] => {
-	let pieces: number[] | null = null;
-	for (let index = 0; index < segments.length; index += 4) {
+/** Parts of one segment inside any of the boxes, by their start; empty for most segments. */
+const coveredParts = (segments: readonly number[], index: number, boxes: readonly Oriented[]): Inside[] => {
+	const parts: Inside[] = [];
+	for (const box of boxes) {
 		const inside = apart(box, segments, index) ? null : insideOf(box, segments, index);
-		if (inside === null) {
-			if (pieces !== null) pushPiece(pieces, segments, index, [0, 1]);
-			continue;
-		}
-		pieces ??= segments.slice(0, index);
-		pushPiece(pieces, segments, index, [0, inside[0]]);
-		pushPiece(pieces, segments, index, [inside[1], 1]);
+		if (inside !== null) parts.push(inside);
 	}
-	return pieces ?? segments;
+	return parts.length > 1 ? parts.sort((a, b) => a[0] - b[0]) : parts;
 };
 
 /**
  * Takes out of straight segments what lies inside any of the rectangles.
  * @param segments x1, y1, x2, y2 of each, one after the other [mm]
  * @param boxes turned rectangles
+ * @param speck pieces shorter than this that a cut leaves are dropped [mm]
  * @returns what is left, in the same form [mm]
  * @example cutAtBoxes([-5, 0, 5, 0], [orientedAt(0, 0, [2, 1], 0)]) // [-5, 0, -2, 0, 2, 0, 5, 0]
  * Source: Liang and Barsky, parametric line clipping.
  */
-export function cutAtBoxes(segments: readonly number[], boxes: readonly Oriented[]): readonly number[] {
-	return boxes.reduce(cutOne, segments);
+export function cutAtBoxes(
+	segments: readonly number[],
+	boxes: readonly Oriented[],
+	speck = SPECK
+): readonly number[] {
+	const left: number[] = [];
+	for (let index = 0; index < segments.length; index += 4) {
+		const piece = { segments, index, speck };
+		let from = 0;
+		for (const part of coveredParts(segments, index, boxes)) {
+			if (part[0] > from) pushPiece(left, piece, [from, part[0]]);
+			from = Math.max(from, part[1]);
+		}
+		if (from < 1) pushPiece(left, piece, [from, 1]);
+	}
+	return left;
 }
 
 interface Upright {
@@ -183,7 +197,7 @@ export function keepInside(segments: readonly number[], room: Upright): number[]
 	const kept: number[] = [];
 	for (let index = 0; index < segments.length; index += 4) {
 		const inside = insideOf(box, segments, index);
-		if (inside !== null) pushPiece(kept, segments, index, inside);
+		if (inside !== null) pushPiece(kept, { segments, index, speck: SPECK }, inside);
 	}
 	return kept;
 }

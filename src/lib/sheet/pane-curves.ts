@@ -122,10 +122,14 @@ const settleName = (below: Below, curve: BenefitCurve, points: readonly Point[],
 
 const settleAt = (below: Below, label: Label, point: Point): void => {
 	const y = levelOf(below.pane, point.gain);
-	const places = aroundPoint(point.x, y, roomOf(label), 0.8 * below.board.k);
+	const near = aroundPoint(point.x, y, roomOf(label), 0.8 * below.board.k);
+	const places = [...near].filter(({ cost }) => cost < FAR);
 	const placed = placeLabel(below.field, label, places);
 	if (placed !== null) below.texts.push(placed.item);
 };
+
+/** Places that cost more stand too far from what they name. */
+const FAR = 20;
 
 /** The gain of the choice at the fundamental, beside the choice's line. */
 const settleChosen = (below: Below, curve: BenefitCurve): void => {

@@ -8,11 +8,12 @@ import type { Item } from '$lib/scene/scene';
 import { edgePen, type Edge } from './band-edge';
 import { capOf, fallsOf, penOf, segmentsPath, type Board } from './board';
 import { fixed } from './edge';
-import { hatchLines } from './hatch';
+import { wrap } from './fitting';
+import { HATCH_SPECK, hatchLines, roundDots } from './hatch';
 import type { Pen } from './ink';
 import { fieldOf } from './label';
 import { cutAtBoxes, type Oriented } from './oriented';
-import { benefitItems, settleBenefit, type Below } from './pane-curves';
+import { benefitItems, settleBenefit, type Below, type DrawnCurve } from './pane-curves';
 import { group, lettered, rectangle, ruled } from './pen';
 import { capacitanceThrough, footOf, type Pane } from './plot';
 import { polygonPath, cornersOf } from './polygon';
@@ -85,7 +86,8 @@ const hatchBelow = (below: Below): Item[] => {
 		const right = clipX(pane, foot - strip.from);
 		if (right <= left) return [];
 		const polygon = cornersOf({ x: left, y: pane.y, width: right - left, height: pane.height });
-		const lines = cutAtBoxes(hatchLines(polygon, strip.class, strip.density, board.k), field.boxes);
+		const hatch = hatchLines(polygon, strip.class, strip.density, board.k);
+		const lines = cutAtBoxes(hatch, field.boxes, HATCH_SPECK * board.k);
 		const pen: Pen = `${strip.class}${strip.density === 'bank' ? 'Bank' : 'Field'}`;
 		return lines.length === 0 ? [] : [{ type: 'path', d: segmentsPath(lines), stroke: penOf(board, pen) }];
 	});
@@ -134,17 +136,26 @@ const nominalsBelow = (below: Below): Item[] => {
 	return clear.length === 0 ? [] : [ruled(clear, penOf(board, 'nominalEdge'))];
 };
 
-const choiceBelow = (below: Below): Item[] => {
+/** Radius of the ring where the choice meets the first curve, at k = 1 [mm]. */
+const READING = 0.9;
+
+const choiceBelow = (below: Below, curves: readonly DrawnCurve[]): Item[] => {
 	const { board } = below;
 	if (board.choice === null) return [];
 	const x = footOf(board.input.plot, board.choice);
 	if (!insidePane(below, x)) return [];
-	return [ruled(upright(below, x), penOf(board, 'choice'), { role: 'choice', of: 'choice' })];
+	const line = ruled(upright(below, x), penOf(board, 'choice'), { role: 'choice', of: 'choice' });
+	const [first] = curves;
+	const y = first === undefined ? -1 : levelOf(below, first.curve.gain(board.choice));
+	if (y < below.pane.y || y > below.pane.y + below.pane.height) return [line];
+	const ring = roundDots([x, y], READING * board.k);
+	const { paper } = board.input.ink;
+	return [line, { type: 'path', d: ring, fill: paper, stroke: penOf(board, 'head') }];
 };
 
 /** Outside the pane at k = 1 [mm]. */
 const TICK = 1.2;
-const NUMERAL_GAP = 0.7;
+const NUMERAL_GAP = 0.5;
 
 const gainNumerals = (below: Below): Item[] => {
 	const { board, pane } = below;
@@ -174,7 +185,7 @@ const gainNumerals = (below: Below): Item[] => {
 
 const capacitanceNumerals = (below: Below): Item[] => {
 	const { board, pane } = below;
-	const { ink, plot, decimalMark, words } = board.input;
+	const { ink, plot, decimalMark } = board.input;
 	const { k } = board;
 	const cap = capOf(board);
 	const foot = pane.y + pane.height;
@@ -188,36 +199,41 @@ const capacitanceNumerals = (below: Below): Item[] => {
 			anchor: 'middle'
 		})
 	);
-	const row = baseline + 1.65 * cap;
-	const right = pane.x + pane.width;
-	const arrow = { tip: right, level: row - cap / 2, barb: 0.8 * k };
+	return [ruled(ticks, penOf(board, 'tick')), ...numerals];
+};
+
+/** Beside the pane's foot: C falls to the right, other than on most axes. */
+const direction = (below: Below): Item[] => {
+	const { board, pane } = below;
+	const { ink, words } = board.input;
+	const { k } = board;
+	const cap = capOf(board);
+	const x = pane.x + pane.width + 2 * k;
+	const foot = pane.y + pane.height;
+	const lines = wrap(words.chart.capacitanceFalls, { width: 23 * k, cap }, 2);
+	const [tail, tip, barb] = [x, x + 9 * k, 0.8 * k];
+	const level = foot - 0.6 * k;
+	const at = [
+		tail,
+		level,
+		tip,
+		level,
+		tip - 2 * barb,
+		level - barb,
+		tip,
+		level,
+		tip - 2 * barb,
+		level + barb
+	];
+	const stroke = { ...penOf(board, 'switching'), colour: ink.capacitance };
 	return [
-		ruled(ticks, penOf(board, 'tick')),
-		...numerals,
-		lettered(words.chart.capacitanceFalls, right - 6.5 * k, row, {
-			cap,
-			fill: ink.capacitance,
-			anchor: 'end'
-		}),
-		{
-			type: 'path',
-			d: {
-				ops: 'MLMLL',
-				at: [
-					arrow.tip - 5 * k,
-					arrow.level,
-					arrow.tip,
-					arrow.level,
-					arrow.tip - 2 * arrow.barb,
-					arrow.level - arrow.barb,
-					arrow.tip,
-					arrow.level,
-					arrow.tip - 2 * arrow.barb,
-					arrow.level + arrow.barb
-				]
-			},
-			stroke: { ...penOf(board, 'switching'), colour: ink.capacitance }
-		}
+		...lines.map((line, index) =>
+			lettered(line, x, level - 2.4 * k - (lines.length - 1 - index) * 1.6 * cap, {
+				cap,
+				fill: ink.capacitance
+			})
+		),
+		{ type: 'path', d: { ops: 'MLMLL', at }, stroke }
 	];
 };
 
@@ -244,7 +260,7 @@ const drawBelow = (below: Below, edges: readonly Edge[]): Item[] => {
 		...edgesBelow(below, edges),
 		...nominalsBelow(below),
 		...benefitItems(below, curves),
-		...choiceBelow(below),
+		...choiceBelow(below, curves),
 		...below.texts
 	];
 };
@@ -267,6 +283,7 @@ export function paneItems(board: Board, edges: readonly Edge[]): Item[] {
 		...drawBelow(below, edges),
 		...gainNumerals(below),
 		...capacitanceNumerals(below),
+		...direction(below),
 		rectangle(pane, { stroke: penOf(board, 'border') })
 	];
 }

@@ -6,7 +6,7 @@ import { asymptoticInductance, sourceImpedance } from '$lib/network/source';
 import { formatQuantity } from '$lib/quantity/format';
 import { sourceModel } from '$lib/rules/circuit';
 import type { Item } from '$lib/scene/scene';
-import { capOf, clearOfLabels, penOf, segmentsPath, settle, type Board } from './board';
+import { capOf, clearOfLabels, penOf, segmentsPath, settle, settleFirst, type Board } from './board';
 import { tracePlaces, traced } from './curve';
 import { shorten } from './fitting';
 import type { Pen } from './ink';
@@ -46,7 +46,7 @@ const inductorLine = (board: Board): PartLine[] => {
 	settle(
 		board,
 		componentLabel(board, text, ink.inductance, 'inductor'),
-		alongSegment(line, { preferred: 0.3, beside: 0 })
+		alongSegment(line, { preferred: 0.14, beside: 0 })
 	);
 	board.field.rises.push({ from: rise - HALF_ROOM, to: rise + HALF_ROOM, cost: ON_LINE });
 	return [{ of: 'inductor', label: text, pen: 'inductor', segments: line }];
@@ -63,7 +63,7 @@ const capacitorLine = (board: Board): PartLine[] => {
 	settle(
 		board,
 		componentLabel(board, text, ink.capacitance, 'capacitor'),
-		alongSegment(line, { preferred: 0.4, beside: 0 })
+		alongSegment(line, { preferred: 0.45, beside: 0 })
 	);
 	board.field.falls.push({ from: fall - HALF_ROOM, to: fall + HALF_ROOM, cost: ON_LINE });
 	return [{ of: 'capacitor', label: text, pen: 'capacitor', segments: line }];
@@ -78,10 +78,12 @@ const sourceLabel = (board: Board, source: Source, tail: string): Label => {
 		cap,
 		face: 'semibold',
 		fill: board.input.ink.source,
-		of: `source:${source.id}`,
-		always: true
+		of: `source:${source.id}`
 	};
 };
+
+/** Row number alone; it takes the least bad place, since a part's line must have a name. */
+const shortOf = (label: Label): Label => ({ ...label, text: label.text.split(' ')[0] ?? '', always: true });
 
 const networkTail = (source: Source): string => {
 	if (source.kind === 'measured' || source.kind === 'impedance') return '';
@@ -100,7 +102,7 @@ const sourceCurve = (board: Board, source: Source, pen: Pen): PartLine[] => {
 	const segments = traced(plot, size);
 	if (segments.length === 0) return [];
 	const label = sourceLabel(board, source, networkTail(source));
-	settle(board, label, tracePlaces(segments, label, 0.85));
+	settleFirst(board, [label, shortOf(label)], (text) => tracePlaces(segments, text, 0.85));
 	board.field.curves.push({ segments, cost: ON_LINE });
 	return [{ of: `source:${source.id}`, label: label.text, pen, segments }];
 };
@@ -114,7 +116,7 @@ const sourceRange = (board: Board, source: ImpedanceSource, pen: Pen): PartLine[
 		const rise = riseOf(plot, inductance);
 		const tail = formatQuantity(inductance, 'inductance', { decimalMark });
 		const label = sourceLabel(board, source, tail);
-		settle(board, label, alongSegment(line, { preferred: 0.2, beside: 0 }));
+		settleFirst(board, [label, shortOf(label)], () => alongSegment(line, { preferred: 0.84, beside: 0 }));
 		board.field.rises.push({ from: rise - HALF_ROOM, to: rise + HALF_ROOM, cost: ON_LINE });
 		return [{ of: `source:${source.id}`, label: label.text, pen, segments: line }];
 	});

@@ -1,5 +1,6 @@
 /** Convex polygons as flat lists x, y, x, y …, and how bands and hatches are clipped to them. */
 import type { PathData } from '$lib/scene/scene';
+import { numberAt } from './oriented';
 
 /** Corners one after the other, x and y each; empty where nothing is left [mm]. */
 export type Polygon = readonly number[];
@@ -32,12 +33,12 @@ export function cornersOf({ x, y, width, height }: Rectangle): Polygon {
  */
 export function keepSide(polygon: Polygon, [a, b, c]: readonly [number, number, number]): Polygon {
 	const kept: number[] = [];
-	let px = polygon.at(-2) ?? 0;
-	let py = polygon.at(-1) ?? 0;
+	let px = numberAt(polygon, polygon.length - 2);
+	let py = numberAt(polygon, polygon.length - 1);
 	let before = a * px + b * py - c;
 	for (let index = 0; index < polygon.length; index += 2) {
-		const x = polygon[index] ?? 0;
-		const y = polygon[index + 1] ?? 0;
+		const x = numberAt(polygon, index);
+		const y = numberAt(polygon, index + 1);
 		const here = a * x + b * y - c;
 		if (here >= 0 !== before >= 0) {
 			const t = before / (before - here);
@@ -78,12 +79,12 @@ export function chordOf(
 	[a, b, c]: readonly [number, number, number]
 ): readonly [number, number, number, number] | null {
 	const found: number[] = [];
-	let px = polygon.at(-2) ?? 0;
-	let py = polygon.at(-1) ?? 0;
+	let px = numberAt(polygon, polygon.length - 2);
+	let py = numberAt(polygon, polygon.length - 1);
 	let before = a * px + b * py - c;
 	for (let index = 0; index < polygon.length; index += 2) {
-		const x = polygon[index] ?? 0;
-		const y = polygon[index + 1] ?? 0;
+		const x = numberAt(polygon, index);
+		const y = numberAt(polygon, index + 1);
 		const here = a * x + b * y - c;
 		if (here >= 0 !== before >= 0) {
 			const t = before / (before - here);
@@ -91,10 +92,8 @@ export function chordOf(
 		}
 		[px, py, before] = [x, y, here];
 	}
-	const [x1, y1, x2, y2] = found;
-	return y2 === undefined || y1 === undefined || x1 === undefined || x2 === undefined
-		? null
-		: [x1, y1, x2, y2];
+	const [x1 = 0, y1 = 0, x2 = 0, y2 = 0] = found;
+	return found.length < 4 ? null : [x1, y1, x2, y2];
 }
 
 /**

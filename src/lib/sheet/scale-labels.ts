@@ -5,8 +5,8 @@ export interface Reading {
 	/** Where it is read [mm]. */
 	readonly y: number;
 	readonly text: string;
-	/** Rule numbers; empty for none. */
-	readonly numbers: string;
+	/** Numbers of the rules. */
+	readonly numbers: readonly string[];
 	readonly face: Face;
 	readonly fill: string;
 	/** 4 stays where it is read; lighter ones leave first where there is no room; 0 gives way rather than move. */

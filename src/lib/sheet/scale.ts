@@ -1,22 +1,24 @@
 /** The C scale at the right: the chart cut at the lowest switching frequency, where edges and choice are read. */
 import { formatQuantity } from '$lib/quantity/format';
+import { textWidth } from '$lib/scene/metrics';
 import type { Item } from '$lib/scene/scene';
 import { ruleNumber, type Edge } from './band-edge';
 import { capOf, penOf, segmentsPath, type Board } from './board';
 import { formatEdge } from './edge';
+import { HEADER_ROW } from './header';
 import { hatchLines } from './hatch';
 import { group, lettered, rectangle, ruled } from './pen';
 import { capacitanceThrough, yOf } from './plot';
 import { cornersOf } from './polygon';
 import { gridValues } from './grid';
-import { spread, type Reading } from './scale-labels';
+import { spread, type PlacedReading, type Reading } from './scale-labels';
 import type { Box } from './paper';
 
 /** Beside the plot at k = 1 [mm]. */
 const GAP = 1.2;
-const WIDTH = 4;
-const LEADER = 1.6;
-const LABEL = 3;
+const WIDTH = 3.6;
+const LEADER = 1;
+const LABEL = 2;
 /** Right end of the rule numbers, from the plot. */
 const NUMBERS = 26.4;
 
@@ -91,27 +93,45 @@ const ticks = (scale: Scale): Item[] => {
 	return lines.length === 0 ? [] : [ruled(lines, stroke)];
 };
 
-const edgeReadings = (scale: Scale, edges: readonly Edge[]): Reading[] => {
+/** Edges that close no window need no more than three digits. */
+const DIGITS = 3;
+
+const readingText = ({ board }: Scale, { capacitance, forbids, limiting }: Edge): string => {
+	const { decimalMark } = board.input;
+	const round = forbids === 'larger' ? 'down' : 'up';
+	if (limiting) return formatEdge(capacitance, round, decimalMark);
+	return formatQuantity(capacitance, 'capacitance', { digits: DIGITS, round, decimalMark });
+};
+
+const edgeWeight = ({ limiting, finding }: Edge): number => {
+	if (limiting) return 3;
+	return finding.class === 'advisory' ? 1 : 2;
+};
+
+/** One reading of all edges at one value: the weightiest writes it, all rules are named. */
+const readingOf = (scale: Scale, together: readonly Edge[]): Reading | null => {
 	const { board } = scale;
-	const { decimalMark, ink } = board.input;
-	const readings = new Map<number, Reading>();
-	for (const edge of edges) {
-		const y = yOfCapacitance(scale, edge.capacitance);
-		if (!insideScale(scale, y)) continue;
-		const number = ruleNumber(board, edge.finding.rule);
-		const known = readings.get(edge.capacitance);
-		const numbers = [known?.numbers ?? '', number].filter((text) => text !== '');
-		const round = edge.forbids === 'larger' ? 'down' : 'up';
-		readings.set(edge.capacitance, {
-			y,
-			text: formatEdge(edge.capacitance, round, decimalMark),
-			numbers: [...new Set(numbers.join(' ').split(' '))].join(' '),
-			face: edge.limiting || known?.face === 'bold' ? 'bold' : 'regular',
-			fill: ink.ink,
-			weight: Math.max(known?.weight ?? 0, edge.limiting ? 3 : edge.finding.class === 'advisory' ? 1 : 2)
-		});
-	}
-	return [...readings.values()];
+	const [edge] = [...together].sort((a, b) => edgeWeight(b) - edgeWeight(a));
+	if (edge === undefined) return null;
+	const y = yOfCapacitance(scale, edge.capacitance);
+	if (!insideScale(scale, y)) return null;
+	const numbers = [...new Set(together.map(({ finding }) => ruleNumber(board, finding.rule)))];
+	return {
+		y,
+		text: readingText(scale, edge),
+		numbers,
+		face: edge.limiting ? 'bold' : 'regular',
+		fill: board.input.ink.ink,
+		weight: edgeWeight(edge)
+	};
+};
+
+const edgeReadings = (scale: Scale, edges: readonly Edge[]): Reading[] => {
+	const byValue = new Map<number, Edge[]>();
+	for (const edge of edges) byValue.set(edge.capacitance, [...(byValue.get(edge.capacitance) ?? []), edge]);
+	return [...byValue.values()]
+		.map((together) => readingOf(scale, together))
+		.filter((reading) => reading !== null);
 };
 
 const choiceReading = (scale: Scale): Reading[] => {
@@ -121,7 +141,7 @@ const choiceReading = (scale: Scale): Reading[] => {
 	const y = yOfCapacitance(scale, board.choice);
 	if (!insideScale(scale, y)) return [];
 	const text = formatQuantity(board.choice, 'capacitance', { decimalMark });
-	return [{ y, text, numbers: '', face: 'bold', fill: ink.ink, weight: 4 }];
+	return [{ y, text, numbers: [], face: 'bold', fill: ink.ink, weight: 4 }];
 };
 
 const decadeReadings = (scale: Scale): Reading[] => {
@@ -134,11 +154,29 @@ const decadeReadings = (scale: Scale): Reading[] => {
 		.map(({ value }) => ({
 			y: yOfCapacitance(scale, value),
 			text: formatQuantity(value, 'capacitance', { decimalMark }),
-			numbers: '',
+			numbers: [],
 			face: 'regular',
 			fill: ink.capacitance,
 			weight: 0
 		}));
+};
+
+/** As many rule numbers as stand between the value and the right end; an ellipsis says that there are more. */
+const numbersText = ({ text, numbers, face }: Reading, room: number, cap: number): string => {
+	const width = room - textWidth(text, face, cap) - 0.2 * cap;
+	const tails = numbers.map((_, index) =>
+		index === numbers.length - 1 ? numbers.join(' ') : `${numbers.slice(0, index + 1).join(' ')}…`
+	);
+	return tails.filter((tail) => textWidth(tail, face, cap) <= width).at(-1) ?? '';
+};
+
+const leaderOf = ({ board, box }: Scale, { reading, at }: PlacedReading): Item[] => {
+	if (reading.weight === 0) return [];
+	const right = box.x + box.width;
+	const { k } = board;
+	const way = [right, reading.y, right + 0.5 * k, reading.y, right + (LEADER + 0.7) * k, at];
+	const stroke = { ...penOf(board, 'capacitanceDecade'), colour: board.input.ink.ink };
+	return [{ type: 'path', d: { ops: 'MLL', at: way }, stroke }];
 };
 
 const labels = (scale: Scale, edges: readonly Edge[]): Item[] => {
@@ -146,37 +184,16 @@ const labels = (scale: Scale, edges: readonly Edge[]): Item[] => {
 	const { plot } = board.input;
 	const cap = capOf(board);
 	const readings = [...choiceReading(scale), ...edgeReadings(scale, edges), ...decadeReadings(scale)];
-	const right = box.x + box.width;
 	const placed = spread(readings, { from: plot.y, to: plot.y + plot.height, pitch: 1.62 * cap });
-	const x = right + LABEL * board.k;
+	const x = box.x + box.width + LABEL * board.k;
+	const end = plot.x + plot.width + NUMBERS * board.k;
 	return placed.flatMap(({ reading, at }) => {
 		const style = { cap, face: reading.face, fill: reading.fill } as const;
-		const bend = right + LEADER * board.k;
-		const leader =
-			reading.weight === 0
-				? []
-				: [
-						{
-							type: 'path' as const,
-							d: {
-								ops: 'MLL',
-								at: [right, reading.y, right + 0.6 * board.k, reading.y, bend + 0.9 * board.k, at]
-							},
-							stroke: penOf(board, 'capacitanceDecade')
-						}
-					];
-		const inked = leader.map((item) => ({
-			...item,
-			stroke: { ...item.stroke, colour: board.input.ink.ink }
-		}));
-		const numbers = lettered(reading.numbers, plot.x + plot.width + NUMBERS * board.k, at + cap / 2, {
-			...style,
-			anchor: 'end'
-		});
+		const numbers = numbersText(reading, end - x, cap);
 		return [
-			...inked,
+			...leaderOf(scale, { reading, at }),
 			lettered(reading.text, x, at + cap / 2, style),
-			...(reading.numbers === '' ? [] : [numbers])
+			...(numbers === '' ? [] : [lettered(numbers, end, at + cap / 2, { ...style, anchor: 'end' })])
 		];
 	});
 };
@@ -201,21 +218,21 @@ const marks = (scale: Scale, edges: readonly Edge[]): Item[] => {
 
 /** Over the scale: the frequency at which it is cut, or a line to write it on. */
 const head = (board: Board, box: Box): Item[] => {
-	const { ink, words, decimalMark, plot } = board.input;
+	const { ink, words, decimalMark, plot, pane } = board.input;
 	const { k, readAt } = board;
-	const cap = capOf(board);
-	const style = { cap, fill: ink.capacitance };
-	const upper = plot.y - 6.4 * k;
+	const style = { cap: capOf(board), fill: ink.capacitance };
 	const lower = plot.y - 2.2 * k;
+	const upper = plot.y - 6.4 * k;
+	const end = plot.x + plot.width + NUMBERS * k;
+	const frequency = readAt === null ? '' : formatQuantity(readAt, 'frequency', { decimalMark });
+	if (pane !== null)
+		return [lettered(`${words.chart.scaleAt} ${frequency}`, box.x, plot.y - HEADER_ROW * k, style)];
 	const first = lettered(words.chart.scaleAt, box.x, upper, style);
-	if (readAt !== null) {
-		return [first, lettered(formatQuantity(readAt, 'frequency', { decimalMark }), box.x, lower, style)];
-	}
-	const end = plot.x + plot.width + NUMBERS * k - 4.5 * k;
+	if (readAt !== null) return [first, lettered(frequency, box.x, lower, style)];
 	return [
 		first,
-		ruled([box.x, lower, end, lower], penOf(board, 'switching')),
-		lettered('Hz', plot.x + plot.width + NUMBERS * k, lower, { ...style, anchor: 'end' })
+		ruled([box.x, lower, end - 4.5 * k, lower], penOf(board, 'switching')),
+		lettered('Hz', end, lower, { ...style, anchor: 'end' })
 	];
 };
 

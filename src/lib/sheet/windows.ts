@@ -25,7 +25,7 @@ export function isChannel(board: Board, { from, to }: Window): boolean {
 
 /** Half the width of the choice and of a window's edge, with a little air [mm]. */
 const CHOICE_ROOM = 1;
-const EDGE_ROOM = 0.4;
+const EDGE_ROOM = 0.3;
 
 /**
  * Keeps lettering off the windows' channels and edges and off the choice.
