@@ -11,10 +11,11 @@ const LINE = 0.25;
 
 /** Distances at k = 1 [mm]. */
 const UNDER_FOOT = 10.6;
-const FROM_FRAME = 2;
-const ABOVE_FOOT = 8;
-const TICK = 0.9;
-const END_TICK = 1.7;
+/** Close to the frame, so that the longest numeral, such as 100 mΩ, ends before the ticks. */
+const FROM_FRAME = 1.2;
+const ABOVE_FOOT = 5;
+const TICK = 0.7;
+const END_TICK = 1.4;
 const GAP = 2;
 /** The sentence stands on the rule, between its end ticks, clear of what the chart says at its foot. */
 const TEXT_RISE = 1.3;

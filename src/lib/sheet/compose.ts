@@ -66,33 +66,35 @@ const checkedStep = (input: SheetInput, steps: number): number | null => {
 	throw new LayoutError('/step', `A step from 1 to ${String(steps)} is wanted, got ${String(step)}.`);
 };
 
+const checkedDesign = ({ design, kind }: SheetInput): Design | null => {
+	if (design !== undefined || kind === 'blank') return design ?? null;
+	throw new LayoutError(
+		'/design',
+		`A sheet of the kind ${kind} needs a design; only a blank sheet has none.`
+	);
+};
+
 const settle = (input: SheetInput): Setting => {
 	const { layout, kind } = input;
-	const design = input.design ?? null;
-	if (design === null && kind !== 'blank') {
-		throw new LayoutError(
-			'/design',
-			`A sheet of the kind ${kind} needs a design; only a blank sheet has none.`
-		);
-	}
+	const design = checkedDesign(input);
 	const evaluation = design === null ? null : (input.evaluation ?? evaluate(design));
 	const paper = dividePaper(layout);
 	const steps = design === null ? 0 : sheetSteps(design);
 	const step = checkedStep(input, steps);
-	const wanted = layout.benefitPane ?? kind !== 'blank';
-	const rules = design?.rules.length ?? 0;
+	const pane = layout.benefitPane ?? kind !== 'blank';
+	const rulesShown = (step ?? steps) - 1;
 	return {
 		input,
 		design,
 		evaluation,
 		paper,
-		...fitChart({ paper, layout, design, evaluation, pane: wanted }),
+		...fitChart({ paper, layout, design, evaluation, pane }),
 		ink: INKS[layout.ink ?? 'colour'],
 		words: wordsOf(layout.language),
 		mark: layout.decimalMark ?? '.',
 		step,
 		steps,
-		rulesShown: step === null ? rules : Math.min(rules, step - 1),
+		rulesShown: Math.max(0, rulesShown),
 		resultShown: step === null || step === steps
 	};
 };

@@ -61,12 +61,20 @@ const cutWord = (word: string, measure: Measure): string[] => {
  */
 export function wrap(text: string, measure: Measure, most = Infinity): string[] {
 	const words = text.split(/[ \t\n\r]+/).filter((word) => word !== '');
+	const { cap, face = 'regular', width: room } = measure;
+	const space = textWidth(' ', face, cap);
 	const lines: string[] = [];
+	let used = 0;
 	for (const piece of words.flatMap((word) => cutWord(word, measure))) {
+		const width = textWidth(piece, face, cap);
 		const line = lines.at(-1);
-		const joined = line === undefined ? piece : `${line} ${piece}`;
-		if (line !== undefined && fits(joined, measure)) lines[lines.length - 1] = joined;
-		else lines.push(piece);
+		if (line !== undefined && used + space + width <= room) {
+			lines[lines.length - 1] = `${line} ${piece}`;
+			used += space + width;
+		} else {
+			lines.push(piece);
+			used = width;
+		}
 	}
 	if (lines.length <= most) return lines;
 	const last = lines.slice(most - 1).join(' ');

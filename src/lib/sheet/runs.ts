@@ -167,12 +167,18 @@ const shortened = (runs: readonly Run[], width: number, cap: number): Run[] => {
  */
 export function wrapRuns(runs: readonly Run[], width: number, cap: number, most: number): Run[][] {
 	const lines: Run[][] = [];
+	const space = textWidth(' ', 'regular', cap);
+	let used = 0;
 	for (const word of words(runs)) {
-		const line = lines.at(-1);
-		const full =
-			line === undefined || runsWidth([...line, ...word], cap) > width + widthOf({ text: ' ' }, cap);
-		if (full && lines.length < most) lines.push([...word]);
-		else line?.push(...word);
+		const length = runsWidth(word, cap);
+		const full = lines.length === 0 || used + length > width + space;
+		if (full && lines.length < most) {
+			lines.push([...word]);
+			used = length;
+		} else {
+			lines.at(-1)?.push(...word);
+			used += length;
+		}
 	}
 	return lines.map((line) =>
 		runsWidth(trimmed(line), cap) > width ? shortened(line, width, cap) : trimmed(line)

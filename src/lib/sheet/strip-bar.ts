@@ -62,6 +62,11 @@ export interface BarRoom {
 	readonly barHeight: number;
 }
 
+interface Ends {
+	readonly from: number;
+	readonly to: number;
+}
+
 const place = ({ axis, x, context }: BarRoom, capacitance: number): number => {
 	const width = BAR_WIDTH * context.k;
 	if (capacitance <= 0) return x;
@@ -69,7 +74,10 @@ const place = ({ axis, x, context }: BarRoom, capacitance: number): number => {
 	return x + width * Math.min(1, Math.max(0, part));
 };
 
-const stretch = (room: BarRoom, from: number, to: number, top: number, height: number): Box => {
+/** A stretch of the axis, as high as the whole row or as the bar in its middle. */
+const stretch = (room: BarRoom, { from, to }: Ends, whole: boolean): Box => {
+	const height = whole ? room.height : room.barHeight;
+	const top = room.y + (room.height - height) / 2;
 	const left = place(room, from);
 	const width = Math.max(LEAST, place(room, to) - left);
 	const most = room.x + BAR_WIDTH * room.context.k;
@@ -89,9 +97,7 @@ export function barGround(room: BarRoom): Item[] {
 	const decades = Array.from({ length: axis.to - axis.from + 1 }, (_, index) => x + index * step);
 	const windows = resultShown ? evaluation.windows : [];
 	return [
-		...windows.map((window) =>
-			rectangle(stretch(room, window.from, window.to, y, height), { fill: ink.window })
-		),
+		...windows.map((window) => rectangle(stretch(room, window, true), { fill: ink.window })),
 		ruled(
 			decades.flatMap((at) => [at, y, at, y + height]),
 			strokeOf(ink, 'rule', k)
@@ -123,9 +129,9 @@ const closes = (windows: readonly Window[], rule: string, side: 'from' | 'to', e
 	windows.some((window) => window.limitedBy[side] === rule && Math.abs(window[side] / edge - 1) < 1e-9);
 
 const bandItems = (room: BarRoom, finding: Finding, from: number, to: number): Item[] => {
-	const { context, y, height, barHeight } = room;
+	const { context } = room;
 	const { ink, k, evaluation } = context;
-	const box = stretch(room, from, to, y + (height - barHeight) / 2, barHeight);
+	const box = stretch(room, { from, to }, false);
 	const edge = finding.class === 'mandatory' ? 'mandatoryEdge' : 'designEdge';
 	const corners = cornersOf(box);
 	const fill: Item =
@@ -192,9 +198,9 @@ export function ruleBar(room: BarRoom, finding: Finding): Item[] {
  * @example windowBar(room, 2.526e-7, 3.96e-7, false).length // 2
  */
 export function windowBar(room: BarRoom, from: number, to: number, nominal: boolean): Item[] {
-	const { context, y, height, barHeight } = room;
+	const { context } = room;
 	const { ink, k } = context;
-	const box = stretch(room, from, to, y + (height - barHeight) / 2, barHeight);
+	const box = stretch(room, { from, to }, false);
 	const fill = nominal ? ink.nominal : ink.window;
 	return [axisLine(room), rectangle(box, { fill, stroke: strokeOf(ink, 'windowEdge', k) })];
 }

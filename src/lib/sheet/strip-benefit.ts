@@ -105,7 +105,7 @@ const rowItems = (context: StripContext, row: Row, at: { x: number; y: number },
 	const labelRoom = end - left - textWidth(row.frequency, 'regular', cap) - 1 * k;
 	const bars: Item[] = [];
 	const [first] = row.gains;
-	if (resultShown && first != null && Math.abs(first.gain_dB) > 0.05) {
+	if (resultShown && first !== null && first !== undefined && Math.abs(first.gain_dB) > 0.05) {
 		const tip = scale.zero + first.gain_dB * scale.perDecibel;
 		const box = {
 			x: Math.min(tip, scale.zero),

@@ -14,7 +14,8 @@ const RESULT = 6.8;
 const BAR_HEIGHT = 3.4;
 const DECADES = 4;
 const RULE_ROWS = 5;
-const NOTE_ROWS = 2;
+/** Ruled lines for notes, and room under the last one. */
+const NOTE_LINES = 1;
 
 export interface BlankContext {
 	readonly design: Design | null;
@@ -145,7 +146,7 @@ export function blankBlocks(context: BlankContext): Block[] {
 	const { words } = context;
 	const text = (name: string): Run[] => [{ text: name, face: 'semibold' }];
 	const rules = ruleKinds(context).map((kind, index) => ruleBlock(context, kind, index));
-	const notes = Array.from({ length: NOTE_ROWS }, () => row(context, '', [], RESULT));
+	const notes = Array.from({ length: NOTE_LINES }, () => row(context, '', [], RESULT));
 	return [
 		head(context, '', words.strip.given),
 		...given(context),
@@ -158,6 +159,7 @@ export function blankBlocks(context: BlankContext): Block[] {
 		row(context, '6.3', symbol('C', 'x'), RESULT),
 		row(context, '6.4', text(words.strip.margins), RESULT),
 		head(context, '', words.strip.notes),
-		...notes
+		...notes,
+		{ height: RESULT * context.k, optional: true, draw: () => [] }
 	];
 }

@@ -75,9 +75,11 @@ const supplyRow = (supply: Supply, write: Written, { words }: StripContext): Giv
 
 const loadRows = ({ load }: Design, write: Written, { words }: StripContext): Given[] => {
 	if (load === undefined) return [];
-	const light = load.lightLoad_W === undefined ? '' : `, ≥ ${write(load.lightLoad_W, 'power')}`;
-	const value = `${write(load.power_W, 'power')}${light}, ≥ ${write(load.voltageMin_V, 'voltage')}`;
-	return [{ symbol: 'P', value: plain(value), note: words.strip.load }];
+	const value = `${write(load.power_W, 'power')}, ≥ ${write(load.voltageMin_V, 'voltage')}`;
+	const { lightLoad_W: light } = load;
+	const { load: full, lightLoad } = words.strip;
+	const note = light === undefined ? full : fill(lightLoad, { value: write(light, 'power') });
+	return [{ symbol: 'P', value: plain(value), note }];
 };
 
 const switchingRows = ({ switching }: Design, write: Written, { words }: StripContext): Given[] =>

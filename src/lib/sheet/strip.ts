@@ -29,6 +29,8 @@ interface Density {
 	readonly open: number;
 }
 
+const DENSEST: Density = { heads: false, formulas: false, harmonics: 1, open: 1 };
+
 const DENSITIES: readonly Density[] = [
 	{ heads: true, formulas: true, harmonics: 5, open: 3 },
 	{ heads: false, formulas: true, harmonics: 5, open: 3 },
@@ -36,18 +38,32 @@ const DENSITIES: readonly Density[] = [
 	{ heads: false, formulas: true, harmonics: 3, open: 2 },
 	{ heads: false, formulas: false, harmonics: 5, open: 2 },
 	{ heads: false, formulas: false, harmonics: 3, open: 2 },
-	{ heads: false, formulas: false, harmonics: 1, open: 1 }
+	DENSEST
 ];
 
-const rowsAt = (context: StripContext, density: Density): Block[] => {
+/** Remembers what was made for a key: the densities share most of their rows. */
+const once = <Key, Made>(make: (key: Key) => Made): ((key: Key) => Made) => {
+	const made = new Map<Key, Made>();
+	return (key) => {
+		const known = made.get(key) ?? make(key);
+		made.set(key, known);
+		return known;
+	};
+};
+
+const rowsOf = (context: StripContext): ((density: Density) => Block[]) => {
 	const axis = chooseAxis(context);
-	return [
-		...givenBlocks(context, density.heads),
-		...ruleBlocks(context, axis, density.formulas),
-		...windowSection(context, axis),
-		choiceBlock(context),
-		...benefitBlocks(context, density.harmonics),
-		...cautionBlocks(context, density.open)
+	const given = once((heads: boolean) => givenBlocks(context, heads));
+	const rules = once((formulas: boolean) => ruleBlocks(context, axis, formulas));
+	const benefit = once((harmonics: number) => benefitBlocks(context, harmonics));
+	const cautions = once((open: number) => cautionBlocks(context, open));
+	const result = [...windowSection(context, axis), choiceBlock(context)];
+	return (density) => [
+		...given(density.heads),
+		...rules(density.formulas),
+		...result,
+		...benefit(density.harmonics),
+		...cautions(density.open)
 	];
 };
 
@@ -176,19 +192,23 @@ export function stripItems(input: StripInput): Item[] {
 	const width = first.width - 2 * PAD.side * k;
 	const rooms = columns.map(({ height }) => height - (PAD.top + PAD.foot) * k);
 	const dress = { ink, words, k, width };
-	const ways =
-		context === null
-			? [(): Block[] => blankBlocks({ ...dress, design: blank })]
-			: DENSITIES.map((density) => (): Block[] => rowsAt({ ...context, ...dress }, density));
-	return [group(drawn(placeBlocks(ways, rooms, dress), columns, rooms, k), { role: 'strip' })];
+	if (context === null) {
+		const blocks = blankBlocks({ ...dress, design: blank });
+		const placed = pack(blocks, rooms) ?? cutToFit(blocks, rooms, dress);
+		return [group(drawn(placed, columns, rooms, k), { role: 'strip' })];
+	}
+	const rows = rowsOf({ ...context, ...dress });
+	return [group(drawn(placeBlocks(rows, rooms, dress), columns, rooms, k), { role: 'strip' })];
 }
 
-const placeBlocks = (ways: readonly (() => Block[])[], rooms: readonly number[], dress: Dress): Placed[] => {
-	let blocks: Block[] = [];
-	for (const way of ways) {
-		blocks = way();
-		const placed = pack(blocks, rooms);
+const placeBlocks = (
+	rows: (density: Density) => Block[],
+	rooms: readonly number[],
+	dress: Dress
+): Placed[] => {
+	for (const density of DENSITIES) {
+		const placed = pack(rows(density), rooms);
 		if (placed !== null) return placed;
 	}
-	return cutToFit(blocks, rooms, dress);
+	return cutToFit(rows(DENSEST), rooms, dress);
 };

@@ -102,10 +102,10 @@ interface TitleLine {
 /** The title wraps into the line below; what two lines do not hold, or the supplementary title, takes the third. */
 const titleLines = ({ block }: TitleBlockInput): TitleLine[] => {
 	const measure = { width: COLUMNS[2] - COLUMNS[1] - 2 * PAD, cap: TITLE_CAP, face: 'bold' } as const;
-	const second = block.supplementaryTitle?.trim() ?? '';
-	const whole = wrap(block.title ?? '', measure);
-	const cut =
-		second !== '' && whole.length > TITLE_LINES ? wrap(block.title ?? '', measure, TITLE_LINES) : whole;
+	const { title = '', supplementaryTitle = '' } = block;
+	const second = supplementaryTitle.trim();
+	const whole = wrap(title, measure);
+	const cut = second === '' ? whole : wrap(title, measure, TITLE_LINES);
 	const lines = cut.slice(0, TITLE_LINES).map((text): TitleLine => ({ text, cap: TITLE_CAP, face: 'bold' }));
 	const rest = second === '' ? whole.slice(TITLE_LINES).join(' ') : second;
 	if (rest === '') return lines;

@@ -62,6 +62,7 @@ export const german: Words = {
 		given: 'Gegeben',
 		supply: 'Versorgung',
 		load: 'Last',
+		lightLoad: 'Teillast {value}',
 		converter: 'Wandler',
 		filter: 'Filter',
 		sources: 'Quellen',

@@ -61,7 +61,8 @@ export const english: Words = {
 	strip: {
 		given: 'Given',
 		supply: 'Supply',
-		load: 'Load',
+		load: 'load',
+		lightLoad: 'light load {value}',
 		converter: 'Converter',
 		filter: 'Filter',
 		sources: 'Sources',

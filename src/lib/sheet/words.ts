@@ -56,6 +56,7 @@ export interface Words {
 		readonly given: string;
 		readonly supply: string;
 		readonly load: string;
+		readonly lightLoad: string;
 		readonly converter: string;
 		readonly filter: string;
 		readonly sources: string;
