@@ -1,9 +1,10 @@
-import type { Handle, HandleServerError, MaybePromise, RequestEvent, ServerInit } from '@sveltejs/kit';
+import type { Handle, HandleServerError, RequestEvent, ServerInit } from '@sveltejs/kit';
 import { building } from '$app/environment';
 import { isCrossSite, isOtherName } from '$lib/server/access';
 import { asProblem, secureHeaders } from '$lib/server/answer';
 import { closeDatabase, database } from '$lib/server/db';
 import { loadDemo } from '$lib/server/db/demo';
+import { drained } from '$lib/server/drain';
 import { environment } from '$lib/server/environment';
 import { logFault } from '$lib/server/log';
 
@@ -15,7 +16,7 @@ export const init: ServerInit = async () => {
 	if (DEMO === '1') await loadDemo(database());
 };
 
-async function answer(event: RequestEvent, resolve: () => MaybePromise<Response>): Promise<Response> {
+async function answer(event: RequestEvent, resolve: () => Response | Promise<Response>): Promise<Response> {
 	const { origin } = event.url;
 	if (isOtherName(event.request, event.url)) {
 		return new Response(null, { status: 307, headers: { location: event.url.href } });
@@ -33,7 +34,7 @@ export const handle: Handle = async ({ event, resolve }) => {
 	if (pathname.startsWith('/api/')) event.request.headers.set('accept', 'application/json');
 	const response = await asProblem(pathname, await answer(event, () => resolve(event)));
 	secureHeaders(response.headers, event.url);
-	return response;
+	return drained(event.request, response);
 };
 
 export const handleError: HandleServerError = ({ error: cause, event, status, message }) => {
