@@ -25,6 +25,23 @@ export function powersOfTen(from: number, to: number): number[] {
 	return Array.from({ length: last - first + 1 }, (_, index) => Number(`1e${String(first + index)}`));
 }
 
+/** How far a numeral of the level axis may reach past the left border, where the upright one stands; in capital heights. */
+const OVERHANG = 0.3;
+
+/**
+ * Moves the middle of a numeral so far right that it misses the upright axis's own numeral at the corner.
+ * @param text the numeral
+ * @param x where it belongs [mm]
+ * @param left the plot's left border [mm]
+ * @param cap capital height [mm]
+ * @returns middle of the numeral [mm]
+ * @example clearOfLeft('1 kHz', 36, 36, 2.5) > 36 // true
+ * Source: sheet design.
+ */
+export function clearOfLeft(text: string, x: number, left: number, cap: number): number {
+	return Math.max(x, left - OVERHANG * cap + textWidth(text, 'regular', cap) / 2);
+}
+
 const frequencyNumerals = (board: Board): Item[] => {
 	const { plot, pane, decimalMark, ink } = board.input;
 	const { k } = board;
@@ -35,13 +52,11 @@ const frequencyNumerals = (board: Board): Item[] => {
 	const baseline = above ? border - (TICK + NUMERAL_GAP) * k : border + (TICK + NUMERAL_GAP) * k + cap;
 	const values = powersOfTen(plot.frequencyFrom, plot.frequencyTo);
 	const ticks = values.flatMap((value) => [xOf(plot, value), border, xOf(plot, value), border + away]);
-	const numerals = values.map((value) =>
-		lettered(formatQuantity(value, 'frequency', { decimalMark }), xOf(plot, value), baseline, {
-			cap,
-			fill: ink.ink,
-			anchor: 'middle'
-		})
-	);
+	const numerals = values.map((value) => {
+		const text = formatQuantity(value, 'frequency', { decimalMark });
+		const x = clearOfLeft(text, xOf(plot, value), plot.x, cap);
+		return lettered(text, x, baseline, { cap, fill: ink.ink, anchor: 'middle' });
+	});
 	const symbol = lettered('f', plot.x + plot.width - plot.decade / 2, baseline, {
 		cap,
 		face: 'bold',
@@ -64,8 +79,14 @@ export function numeralBoxes(board: Board): Oriented[] {
 	const cap = capOf(board);
 	const middle = plot.y - (TICK + NUMERAL_GAP) * board.k - cap / 2;
 	return powersOfTen(plot.frequencyFrom, plot.frequencyTo).map((value) => {
-		const width = textWidth(formatQuantity(value, 'frequency', { decimalMark }), 'regular', cap);
-		return orientedAt(xOf(plot, value), middle, [width / 2 + 0.3 * cap, 0.75 * cap], 0);
+		const text = formatQuantity(value, 'frequency', { decimalMark });
+		const width = textWidth(text, 'regular', cap);
+		return orientedAt(
+			clearOfLeft(text, xOf(plot, value), plot.x, cap),
+			middle,
+			[width / 2 + 0.3 * cap, 0.75 * cap],
+			0
+		);
 	});
 }
 

@@ -103,8 +103,10 @@ export function reserveFlag(board: Board): Flag | null {
 	if (flag === null) return null;
 	const half = [Math.abs(flag.end - flag.tip) / 2 + 0.5, HALF_HEIGHT * board.k + 0.5] as const;
 	board.field.boxes.push(orientedAt((flag.tip + flag.end) / 2, flag.middle, half, 0));
-	const way = [Math.abs(flag.tip - flag.x) / 2, 0.6 * board.k] as const;
-	board.field.boxes.push(orientedAt((flag.tip + flag.x) / 2, flag.y, way, 0));
+	const { plot } = board.input;
+	const ways = flag.end > flag.tip ? [flag.x, flag.end] : [flag.tip, plot.x + plot.width];
+	const [from = 0, to = 0] = ways;
+	board.field.boxes.push(orientedAt((from + to) / 2, flag.y, [(to - from) / 2, 0.6 * board.k], 0));
 	return flag;
 }
 

@@ -12,9 +12,9 @@ import { lettered, rectangle, ruled } from './pen';
 import { xOf } from './plot';
 
 /** Above the plot at k = 1: baseline of the row where no numerals stand between [mm]. */
-const ROW = 2.6;
+const ROW = 2.9;
 /** Baseline of the row above the numerals at k = 1 [mm]. */
-export const HEADER_ROW = 5.6;
+export const HEADER_ROW = 6.2;
 const ELBOW = 1.2;
 const GAP = 1;
 
@@ -130,13 +130,12 @@ const headingOf = (board: Board, entry: Switching, taken: readonly Taken[]): Hea
 			{ wording, side: 1, span: { from: x + away, to: x + away + width } }
 		];
 	});
-	const place = places.find(
-		({ span }) => span.from >= plot.x - 12 * k && span.to <= plot.x + plot.width && free(taken, span)
-	);
+	const room = ({ from, to }: Taken): Taken => ({ from: Math.min(from, x), to: Math.max(to, x) });
+	const place = places.find(({ span }) => span.from >= plot.x - 0.5 * k && free(taken, room(span)));
 	if (place === undefined) return null;
 	const { wording, side, span } = place;
 	return {
-		taken: { from: Math.min(span.from, x), to: Math.max(span.to, x) },
+		taken: room(span),
 		items: [leader(board, x, x + side * ELBOW * k), ...headingAt(board, wording, span.from)]
 	};
 };
@@ -174,7 +173,9 @@ export function headerItems(board: Board): Item[] {
 	const entries = (board.input.design?.switching ?? []).filter((entry) =>
 		inside(board, xOf(board.input.plot, centreOf(entry)))
 	);
-	const taken: Taken[] = [];
+	const right = board.input.plot.x + board.input.plot.width;
+	// The head of the C scale stands beyond.
+	const taken: Taken[] = [{ from: right + GAP, to: Infinity }];
 	const headings = entries.flatMap((entry) => {
 		const heading = headingOf(board, entry, taken);
 		if (heading === null) return [];

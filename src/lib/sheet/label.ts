@@ -43,8 +43,6 @@ export interface Label {
 	readonly face: Face;
 	readonly fill: string;
 	readonly of?: string;
-	/** Takes the least bad place where no good one is left. */
-	readonly always?: boolean;
 }
 
 export interface Placed {
@@ -54,8 +52,6 @@ export interface Placed {
 
 /** Cost of what must not happen. */
 export const NEVER = 1000;
-/** Cost of leaving the field, which no label does. */
-const OUTSIDE = Infinity;
 /** Cost of lying on another line, which then stops at the label. */
 export const ON_LINE = 60;
 /** A label stands this clear of what it stops or stands beside, at cap height 2.5 [mm]. */
@@ -96,7 +92,7 @@ const costOfCurves = (field: Field, box: Oriented): number => {
 };
 
 const costOf = (field: Field, box: Oriented): number => {
-	if (leaves(field.room, box)) return OUTSIDE;
+	if (leaves(field.room, box)) return NEVER;
 	const falling = Math.abs(box.sin - box.cos) * box.along + Math.abs(box.cos + box.sin) * box.across;
 	const rising = Math.abs(box.cos + box.sin) * box.along + Math.abs(box.cos - box.sin) * box.across;
 	let cost =
@@ -154,7 +150,7 @@ const itemAt = (label: Label, { x, y, angle }: Place): TextItem => {
 export function placeLabel(field: Field, label: Label, places: Iterable<Place>): Placed | null {
 	const half = roomOf(label);
 	let best: { place: Place; box: Oriented } | null = null;
-	let least = label.always === true ? OUTSIDE : NEVER;
+	let least = NEVER;
 	for (const place of places) {
 		if (place.cost >= least) break;
 		const box = boxAt(half, label, place);

@@ -17,7 +17,7 @@ import { benefitItems, settleBenefit, type Below, type DrawnCurve } from './pane
 import { group, lettered, rectangle, ruled } from './pen';
 import { capacitanceThrough, footOf, type Pane } from './plot';
 import { polygonPath, cornersOf } from './polygon';
-import { powersOfTen } from './axes';
+import { clearOfLeft, powersOfTen } from './axes';
 import { stripsOf } from './zones';
 
 const clipX = (pane: Pane, x: number): number => Math.min(Math.max(x, pane.x), pane.x + pane.width);
@@ -192,13 +192,11 @@ const capacitanceNumerals = (below: Below): Item[] => {
 	const baseline = foot + (TICK + NUMERAL_GAP) * k + cap;
 	const decades = decadesOf(below);
 	const ticks = decades.flatMap((value) => [footOf(plot, value), foot, footOf(plot, value), foot + TICK * k]);
-	const numerals = decades.map((value) =>
-		lettered(formatQuantity(value, 'capacitance', { decimalMark }), footOf(plot, value), baseline, {
-			cap,
-			fill: ink.capacitance,
-			anchor: 'middle'
-		})
-	);
+	const numerals = decades.map((value) => {
+		const text = formatQuantity(value, 'capacitance', { decimalMark });
+		const x = clearOfLeft(text, footOf(plot, value), pane.x, cap);
+		return lettered(text, x, baseline, { cap, fill: ink.capacitance, anchor: 'middle' });
+	});
 	return [ruled(ticks, penOf(board, 'tick')), ...numerals];
 };
 

@@ -6,7 +6,7 @@ import { asymptoticInductance, sourceImpedance } from '$lib/network/source';
 import { formatQuantity } from '$lib/quantity/format';
 import { sourceModel } from '$lib/rules/circuit';
 import type { Item } from '$lib/scene/scene';
-import { capOf, clearOfLabels, penOf, segmentsPath, settle, settleFirst, type Board } from './board';
+import { capOf, clearOfLabels, penOf, segmentsPath, settleFirst, type Board } from './board';
 import { tracePlaces, traced } from './curve';
 import { shorten } from './fitting';
 import type { Pen } from './ink';
@@ -31,8 +31,7 @@ const componentLabel = (board: Board, text: string, fill: string, of: string): L
 	cap: 3.5 * board.k,
 	face: 'semibold',
 	fill,
-	of,
-	always: true
+	of
 });
 
 const inductorLine = (board: Board): PartLine[] => {
@@ -43,11 +42,8 @@ const inductorLine = (board: Board): PartLine[] => {
 	if (line === null) return [];
 	const rise = riseOf(plot, inductance);
 	const text = `L ${formatQuantity(inductance, 'inductance', { decimalMark })}`;
-	settle(
-		board,
-		componentLabel(board, text, ink.inductance, 'inductor'),
-		alongSegment(line, { preferred: 0.14, beside: 0 })
-	);
+	const label = componentLabel(board, text, ink.inductance, 'inductor');
+	settleFirst(board, [label, shortOf(label)], () => alongSegment(line, { preferred: 0.14, beside: 0 }));
 	board.field.rises.push({ from: rise - HALF_ROOM, to: rise + HALF_ROOM, cost: ON_LINE });
 	return [{ of: 'inductor', label: text, pen: 'inductor', segments: line }];
 };
@@ -60,11 +56,8 @@ const capacitorLine = (board: Board): PartLine[] => {
 	if (line === null) return [];
 	const fall = fallOf(plot, capacitance);
 	const text = `C ${formatQuantity(capacitance, 'capacitance', { decimalMark })}`;
-	settle(
-		board,
-		componentLabel(board, text, ink.capacitance, 'capacitor'),
-		alongSegment(line, { preferred: 0.45, beside: 0 })
-	);
+	const label = componentLabel(board, text, ink.capacitance, 'capacitor');
+	settleFirst(board, [label, shortOf(label)], () => alongSegment(line, { preferred: 0.45, beside: 0 }));
 	board.field.falls.push({ from: fall - HALF_ROOM, to: fall + HALF_ROOM, cost: ON_LINE });
 	return [{ of: 'capacitor', label: text, pen: 'capacitor', segments: line }];
 };
@@ -82,8 +75,8 @@ const sourceLabel = (board: Board, source: Source, tail: string): Label => {
 	};
 };
 
-/** Row number alone; it takes the least bad place, since a part's line must have a name. */
-const shortOf = (label: Label): Label => ({ ...label, text: label.text.split(' ')[0] ?? '', always: true });
+/** Symbol or row number alone. */
+const shortOf = (label: Label): Label => ({ ...label, text: label.text.split(' ')[0] ?? '' });
 
 const networkTail = (source: Source): string => {
 	if (source.kind === 'measured' || source.kind === 'impedance') return '';

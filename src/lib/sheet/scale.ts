@@ -221,8 +221,8 @@ const head = (board: Board, box: Box): Item[] => {
 	const { ink, words, decimalMark, plot, pane } = board.input;
 	const { k, readAt } = board;
 	const style = { cap: capOf(board), fill: ink.capacitance };
-	const lower = plot.y - 2.2 * k;
-	const upper = plot.y - 6.4 * k;
+	const lower = plot.y - 2.6 * k;
+	const upper = plot.y - 6.8 * k;
 	const end = plot.x + plot.width + NUMBERS * k;
 	const frequency = readAt === null ? '' : formatQuantity(readAt, 'frequency', { decimalMark });
 	if (pane !== null)
