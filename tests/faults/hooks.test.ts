@@ -80,6 +80,19 @@ it('refuses what another site\u2019s page sends', async () => {
 	expect((await response.json()).message).toContain(application.url);
 });
 
+it.each([
+	['/api/v1/nothing', 404],
+	['/api/v1/schema/design.json', 405],
+	['/nothing', 404]
+])('refuses a body that %s does not read, and answers the next request', async (path, status) => {
+	const headers = { 'content-type': 'application/json' };
+	for (const kilobytes of [300, 600, 3000]) {
+		const response = await get(path, { method: 'POST', body: 'x'.repeat(kilobytes * 1024), headers });
+		await response.text();
+		expect([kilobytes, response.status]).toEqual([kilobytes, status]);
+	}
+});
+
 it('leads from localhost to the address that forms are accepted from', async () => {
 	expect(await getByName('localhost')).toEqual([307, `${application.url}/paper?x=1`]);
 	expect((await getByName('127.0.0.1'))[0]).toBe(200);

@@ -37,6 +37,13 @@ describe('drained', () => {
 		expect(body.taken()).toBe(9);
 	});
 
+	it('leaves a body that was read to its end as a form', async () => {
+		const form = new URLSearchParams({ title: 'Filter' });
+		const request = new Request('http://127.0.0.1/', { method: 'POST', body: form });
+		await request.formData();
+		expect(await drained(request, answer)).toBe(answer);
+	});
+
 	it('answers where there is no body, or a broken one', async () => {
 		expect(await drained(new Request('http://127.0.0.1/'), answer)).toBe(answer);
 		const broken = new ReadableStream<Uint8Array>({

@@ -2,15 +2,17 @@
 const PATIENCE = 8 * 1024 * 1024;
 
 /**
- * Answers a request whose body was not read to its end. Kit's server leaves the rest in the socket,
- * where a client that is still sending waits for seconds and then finds its connection reset instead
- * of the answer; so the rest is read and dropped first.
+ * Answers a request after what nobody read of its body is read and dropped. Kit's server leaves such a
+ * rest in the socket, where it would stand before the connection's next request: that one waits for
+ * seconds and is then reset instead of answered.
  *
- * @example if (!body.ok) return drained(event.request, body.response);
+ * @example return drained(event.request, await resolve(event));
  */
 export async function drained(request: Request, response: Response): Promise<Response> {
-	const reader = request.body?.getReader();
-	if (reader === undefined) return response;
+	const { body } = request;
+	// What reads a body to its end through formData() or json() keeps it locked.
+	if (body === null || body.locked) return response;
+	const reader = body.getReader();
 	let dropped = 0;
 	try {
 		for (let part = await reader.read(); !part.done; part = await reader.read()) {

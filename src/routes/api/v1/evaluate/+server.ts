@@ -3,7 +3,6 @@ import { evaluate } from '$lib/rules/evaluate';
 import { toAnswer } from '$lib/rules/answer';
 import { allowPublic } from '$lib/server/access';
 import { readJson } from '$lib/server/body';
-import { drained } from '$lib/server/drain';
 import { problem } from '$lib/server/problem';
 import { readDesign } from '$lib/server/sheets';
 import type { RequestHandler } from './$types';
@@ -11,7 +10,7 @@ import type { RequestHandler } from './$types';
 export const POST: RequestHandler = async (event) => {
 	allowPublic(event, { rate: true });
 	const body = await readJson(event.request);
-	if (!body.ok) return drained(event.request, body.response);
+	if (!body.ok) return body.response;
 	const design = readDesign(body.value);
 	if (!design.ok) return problem(400, 'The design cannot be evaluated as it is.', design.issues);
 	return json(toAnswer(evaluate(design.value)));

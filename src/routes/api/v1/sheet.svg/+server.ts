@@ -1,7 +1,6 @@
 import { toSvg } from '$lib/render/svg';
 import { allowPublic } from '$lib/server/access';
 import { readJson } from '$lib/server/body';
-import { drained } from '$lib/server/drain';
 import { embeddedFontCss } from '$lib/server/fonts';
 import { problem } from '$lib/server/problem';
 import { draw } from '$lib/server/sheets';
@@ -10,7 +9,7 @@ import type { RequestHandler } from './$types';
 export const POST: RequestHandler = async (event) => {
 	allowPublic(event, { rate: true });
 	const body = await readJson(event.request);
-	if (!body.ok) return drained(event.request, body.response);
+	if (!body.ok) return body.response;
 	const scene = draw(body.value);
 	if (!scene.ok) return problem(400, 'The sheet cannot be drawn from this.', scene.issues);
 	const svg = toSvg(scene.value, { fontCss: embeddedFontCss(scene.value) });
