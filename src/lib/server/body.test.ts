@@ -56,6 +56,14 @@ describe('readJson', () => {
 	);
 });
 
+it('refuses a packed body with 415, and takes one that says it is not', async () => {
+	expect(await refusal(await readJson(post('{}', { ...json, 'content-encoding': 'gzip' })))).toEqual([
+		415,
+		'application/problem+json'
+	]);
+	expect((await readJson(post('{}', { ...json, 'content-encoding': 'identity' }))).ok).toBe(true);
+});
+
 describe('the limit', () => {
 	const exactly = new Uint8Array(BODY_LIMIT).fill(0x20);
 
@@ -75,22 +83,23 @@ describe('the limit', () => {
 		expect(request.bodyUsed).toBe(false);
 	});
 
+	const failing = (cause: Error): Request => {
+		const stream = new ReadableStream({ start: (controller) => controller.error(cause) });
+		const init = { method: 'POST', body: stream, headers: json, duplex: 'half' } as RequestInit;
+		return new Request('http://127.0.0.1/', init);
+	};
+
 	it('turns the server\u2019s own refusal into the same answer', async () => {
-		const stream = new ReadableStream({
-			start: (controller) => controller.error(Object.assign(new Error('too large'), { status: 413 }))
-		});
-		const request = new Request('http://127.0.0.1/', {
-			method: 'POST',
-			body: stream,
-			headers: json,
-			duplex: 'half'
-		} as RequestInit);
-		expect((await refusal(await readJson(request)))[0]).toBe(413);
+		const outcome = await readJson(failing(Object.assign(new Error('too large'), { status: 413 })));
+		expect((await refusal(outcome))[0]).toBe(413);
 	});
 
-	it('does not hide a broken connection', async () => {
-		const stream = new ReadableStream({ start: (controller) => controller.error(new Error('reset')) });
-		const init = { method: 'POST', body: stream, headers: json, duplex: 'half' } as RequestInit;
-		await expect(readJson(new Request('http://127.0.0.1/', init))).rejects.toThrow('reset');
+	it('takes a client that hangs up for no fault of the server', async () => {
+		const outcome = await readJson(failing(Object.assign(new Error('aborted'), { code: 'ECONNRESET' })));
+		expect((await refusal(outcome))[0]).toBe(400);
+	});
+
+	it('does not hide another fault of the stream', async () => {
+		await expect(readJson(failing(new Error('broken')))).rejects.toThrow('broken');
 	});
 });

@@ -18,45 +18,58 @@ function mediaType(request: Request): string {
 	return type.trim().toLowerCase();
 }
 
+/** Unpacking what a stranger packed would need a limit of its own. */
+function isCoded(request: Request): boolean {
+	return (request.headers.get('content-encoding') ?? 'identity').toLowerCase() !== 'identity';
+}
+
 function tooLarge(limit: number): BodyText {
 	const title = `The body is larger than ${limit / 1024} KB.`;
 	return { ok: false, response: problem(413, title) };
 }
 
-/** Kit's server refuses what is over its own limit by an error in the stream. */
-function isTooLarge(cause: unknown): boolean {
-	return typeof cause === 'object' && cause !== null && 'status' in cause && cause.status === 413;
+const brokenOff = (): BodyText => ({
+	ok: false,
+	response: problem(400, 'The body broke off before its end.')
+});
+
+/** What Kit's server tells by an error in the stream: its own limit, or a client that hung up. */
+function refuseStream(cause: unknown, limit: number): BodyText {
+	if (cause instanceof Error && 'status' in cause && cause.status === 413) return tooLarge(limit);
+	if (cause instanceof Error && 'code' in cause && cause.code === 'ECONNRESET') return brokenOff();
+	throw cause;
 }
 
-async function collect(stream: ReadableStream<Uint8Array>, limit: number): Promise<Uint8Array | null> {
+async function collect(stream: ReadableStream<Uint8Array>, limit: number): Promise<BodyText> {
 	const chunks: Uint8Array[] = [];
 	let length = 0;
 	const reader = stream.getReader();
 	try {
 		for (let part = await reader.read(); !part.done; part = await reader.read()) {
 			length += part.value.byteLength;
-			if (length > limit) return null;
+			if (length > limit) return tooLarge(limit);
 			chunks.push(part.value);
 		}
 	} catch (cause) {
-		if (isTooLarge(cause)) return null;
-		throw cause;
+		return refuseStream(cause, limit);
 	} finally {
 		reader.releaseLock();
 	}
-	return Buffer.concat(chunks, length);
+	return decode(Buffer.concat(chunks, length));
 }
 
-/** Reads a request's text up to a limit: 415 for another media type, 413 for too much, 400 for broken UTF-8. */
+/** Reads a request's text up to a limit: 415 for another media type or packed, 413 for too much, 400 for broken UTF-8. */
 export async function readText(request: Request, options: BodyOptions = {}): Promise<BodyText> {
 	const { limit = BODY_LIMIT, types = ['application/json'] } = options;
 	if (!types.includes(mediaType(request))) {
 		return { ok: false, response: problem(415, `Send the body as ${types.join(' or ')}.`) };
 	}
+	if (isCoded(request)) {
+		return { ok: false, response: problem(415, 'Send the body as it is, without a content coding.') };
+	}
 	if (Number(request.headers.get('content-length')) > limit) return tooLarge(limit);
 	if (!request.body) return { ok: true, text: '' };
-	const bytes = await collect(request.body, limit);
-	return bytes ? decode(bytes) : tooLarge(limit);
+	return collect(request.body, limit);
 }
 
 function decode(bytes: Uint8Array): BodyText {
