@@ -1,8 +1,9 @@
 /** The benefit of a nominal value at every line of every source. */
 import type { Design } from '$lib/design/design';
-import { benefitFinder, type BenefitFinder } from '$lib/network/benefit';
+import { benefitFinder, type BenefitFinder, type WorstBenefit } from '$lib/network/benefit';
 import type { ImpedanceCurve } from '$lib/network/curve';
-import type { Interval } from '$lib/quantity/interval';
+import type { SourceModel } from '$lib/network/source';
+import { relativelyEqual, type Interval } from '$lib/quantity/interval';
 import { capacitorPart, filterOf, partCurves, sourceCurves, sourceModel, uncovered } from './circuit';
 import type { Benefit } from './finding';
 import { linesOf } from './lines';
@@ -18,9 +19,20 @@ interface MeteredLine {
 	readonly benefit: Pick<Benefit, 'source' | 'switching' | 'harmonic'>;
 	readonly range: Interval;
 	readonly label: string;
+	readonly model: SourceModel;
 	readonly curves: readonly ImpedanceCurve[];
 	readonly finder: () => BenefitFinder;
 }
+
+/** An inductance read back from a reactance misses the end of its range by rounding. */
+const onEnd = (worst: WorstBenefit, model: SourceModel): WorstBenefit => {
+	if (model.kind !== 'impedance' || worst.inductance === null) return worst;
+	const { inductance } = worst;
+	const end = [model.inductanceMin, model.inductanceMax].find((value) =>
+		relativelyEqual(value, inductance, 1e-9)
+	);
+	return end === undefined ? worst : { ...worst, inductance: end };
+};
 
 /** Samples of the network are taken when they are first asked for, and serve every value after that. */
 const meteredLines = (design: Design): MeteredLine[] => {
@@ -34,6 +46,7 @@ const meteredLines = (design: Design): MeteredLine[] => {
 				benefit: { source: source.id, switching: line.switching.id, harmonic: line.harmonic },
 				range: line,
 				label: source.label,
+				model,
 				curves,
 				finder: () => (finder ??= benefitFinder(filter, model, line))
 			};
@@ -62,9 +75,9 @@ export function benefitMeter(design: Design): (capacitance: number) => Gains {
 		const benefits: Benefit[] = [];
 		const gaps: string[] = [];
 		const measured = part.curve === undefined ? [] : [part.curve];
-		for (const { benefit, range, label, curves, finder } of lines) {
+		for (const { benefit, range, label, curves, model, finder } of lines) {
 			const gap = uncovered([...curves, ...measured], range);
-			if (gap === null) benefits.push({ ...benefit, ...finder().worst(part) });
+			if (gap === null) benefits.push({ ...benefit, ...onEnd(finder().worst(part), model) });
 			else gaps.push(`No benefit known on ${label}. ${gap}`);
 		}
 		return { benefits, gaps };

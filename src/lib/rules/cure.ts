@@ -42,8 +42,12 @@ export function roundOutward(value: number, direction: 'up' | 'down'): number {
 
 const neighbour = (rounded: number, direction: 'up' | 'down'): number => {
 	const [mantissa = '', exponent = ''] = rounded.toExponential(CURE_DIGITS - 1).split('e');
-	const whole = Math.round(Number(mantissa) * 10 ** (CURE_DIGITS - 1)) + (direction === 'up' ? 1 : -1);
-	return Number(`${String(whole)}e${String(Number(exponent) - CURE_DIGITS + 1)}`);
+	const least = 10 ** (CURE_DIGITS - 1);
+	const whole = Math.round(Number(mantissa) * least);
+	const power = Number(exponent) - CURE_DIGITS + 1;
+	if (direction === 'down' && whole === least)
+		return Number(`${String(10 * least - 1)}e${String(power - 1)}`);
+	return Number(`${String(whole + (direction === 'up' ? 1 : -1))}e${String(power)}`);
 };
 
 const within = (knob: Knob, value: number): boolean =>

@@ -92,6 +92,8 @@ const bandOf = (source: Source, { line, guard, worst }: GuardedRange): Band => {
 };
 
 const rangeParts = ({ from, to }: Interval): FormulaPart[] => {
+	if (from === 0)
+		return to === Infinity ? parts`every capacitance` : parts`below ${computed(to, 'capacitance', 'up')}`;
 	if (to === Infinity) return parts`above ${computed(from, 'capacitance', 'down')}`;
 	return parts`${computed(from, 'capacitance', 'down')} … ${computed(to, 'capacitance', 'up')}`;
 };
@@ -169,7 +171,10 @@ const thumbEdgesOf = (
 			{ thumb: thumb.from / guard ** 2, exact: worst.from / guard ** 2 },
 			{ thumb: thumb.to * guard ** 2, exact: worst.to * guard ** 2 }
 		]
-			.filter((edge) => Number.isFinite(edge.thumb) && differs(edge.thumb, edge.exact))
+			.filter(
+				(edge) =>
+					Number.isFinite(edge.thumb) && Number.isFinite(edge.exact) && differs(edge.thumb, edge.exact)
+			)
 			.map((edge) => ({ capacitance: edge.thumb, label: `rule of thumb${order}` }));
 	});
 };

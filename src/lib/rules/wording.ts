@@ -35,8 +35,8 @@ export function plain(value: number, quantity: Quantity): string {
 
 /**
  * Writes a range with its unit once where both ends share it; one value where they agree.
- * @param from lower end [SI]
- * @param to upper end [SI]
+ * @param from lower end, 0 for none [SI]
+ * @param to upper end, Infinity for none [SI]
  * @param quantity what it is
  * @param write how each end is written: computed to three digits unless told otherwise
  * @returns text
@@ -49,6 +49,8 @@ export function wordedRange(
 	quantity: Quantity,
 	write: (value: number, quantity: Quantity) => string = worded
 ): string {
+	if (from === 0) return to === Infinity ? 'any' : `up to ${write(to, quantity)}`;
+	if (to === Infinity) return `from ${write(from, quantity)}`;
 	const low = write(from, quantity);
 	const high = write(to, quantity);
 	if (low === high) return low;
