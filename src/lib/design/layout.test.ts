@@ -112,4 +112,15 @@ describe('layoutJsonSchema', () => {
 			properties: { decade_mm: { type: 'integer', minimum: 5, maximum: 200 } }
 		});
 	});
+
+	it('lists the powers of ten that an axis may start at', () => {
+		const { properties } = layoutJsonSchema();
+		const listed = (key: string) => (properties?.[key] as { enum?: number[] }).enum;
+		expect(listed('frequencyFrom_Hz')).toEqual(expect.arrayContaining([1e-3, 1, 1e3, 1e10]));
+		expect(listed('frequencyFrom_Hz')).toHaveLength(14);
+		expect(listed('impedanceFrom_ohm')).toHaveLength(19);
+		expect(properties?.frequencyFrom_Hz).toMatchObject({
+			description: 'the lower end of the frequency axis'
+		});
+	});
 });

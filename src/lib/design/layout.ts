@@ -11,7 +11,8 @@ const powerOfTen = (words: string, kind: 'frequency' | 'resistance', from: numbe
 	quantity(words, kind, { from, to }).check(
 		z.refine((value) => POWERS.has(value), {
 			error: `Enter ${words} as a power of ten, such as 1, 10 or 1000.`
-		})
+		}),
+		z.meta({ enum: [...POWERS].filter((power) => power >= from && power <= to) })
 	);
 
 export const layoutSchema = branch('the layout', {

@@ -180,6 +180,19 @@ describe('parseDesign', () => {
 		]);
 	});
 
+	it('points at a long key in full, and shortens only the sentence', () => {
+		const key = `${'~/'.repeat(19)}😀${'x'.repeat(10)}`;
+		expect(parseDesign({ ...chargerAuxiliary, [key]: 1, [`${key}y`]: 1 })).toMatchObject({
+			issues: [
+				{
+					pointer: `/${'~0~1'.repeat(19)}😀${'x'.repeat(10)}`,
+					detail: expect.stringContaining('😀…”') as string
+				},
+				{ pointer: `/${'~0~1'.repeat(19)}😀${'x'.repeat(10)}y` }
+			]
+		});
+	});
+
 	it('tells no more than a hundred faults', () => {
 		const extra = Object.fromEntries(Array.from({ length: 5000 }, (_, n) => [`key${String(n)}`, 1]));
 		const parsed = parseDesign({ ...chargerAuxiliary, ...extra });

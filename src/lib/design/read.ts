@@ -8,14 +8,17 @@ export type Read<Value> =
 /** A body of one wrong array could otherwise answer with more text than it sent. */
 const MOST_ISSUES = 100;
 
-const shorten = (key: string): string => (key.length > 40 ? `${key.slice(0, 39)}…` : key);
+const shorten = (key: string): string => {
+	const characters = [...key];
+	return characters.length > 40 ? `${characters.slice(0, 39).join('')}…` : key;
+};
 
 const explain = (found: z.core.$ZodIssue): Issue[] => {
 	if (found.code !== 'unrecognized_keys') {
 		return [{ pointer: toPointer(found.path), detail: found.message }];
 	}
 	return found.keys.map((key) => ({
-		pointer: toPointer([...found.path, shorten(key)]),
+		pointer: toPointer([...found.path, key]),
 		detail: `“${shorten(key)}” ${found.message}`
 	}));
 };

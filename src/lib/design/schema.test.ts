@@ -46,13 +46,23 @@ describe('designJsonSchema', () => {
 		expect(schema.properties?.sources?.items?.oneOf).toHaveLength(3);
 	});
 
-	it('takes one tolerance or two', () => {
+	it('takes one tolerance or two, never both ways', () => {
 		for (const part of ['inductor', 'capacitor', 'choice']) {
 			expect(schema.properties?.[part]?.oneOf).toEqual([
-				{ required: ['tolerance'] },
-				{ required: ['toleranceMinus', 'tolerancePlus'] }
+				{ required: ['tolerance'], properties: { toleranceMinus: false, tolerancePlus: false } },
+				{ required: ['toleranceMinus', 'tolerancePlus'], properties: { tolerance: false } }
 			]);
 		}
+	});
+
+	it('asks for line frequencies of an ac supply only, and for the points of a limit by table only', () => {
+		expect(schema.properties?.supply).toMatchObject({
+			if: { properties: { kind: { const: 'ac' } } },
+			then: { required: ['frequency_Hz', 'frequencyMax_Hz'] },
+			else: { properties: { frequency_Hz: false, frequencyMax_Hz: false } }
+		});
+		expect(schema.properties?.switching?.items).not.toHaveProperty('if');
+		expect(schema.properties?.emission).toMatchObject({ then: { required: ['table'] } });
 	});
 
 	it('has patterns that any dialect of regular expressions reads', () => {

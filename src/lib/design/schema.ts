@@ -93,45 +93,39 @@ const damping = branch('the damping branch', {
 	capacitance_F: capacitance('the damping capacitance Cd')
 });
 
-const SOURCE_KINDS = [
-	'amn-50uH-5ohm',
-	'amn-50uH',
-	'amn-5uH-1ohm',
-	'an-5uH',
-	'impedance',
-	'measured'
-] as const;
+const NETWORK_KINDS = ['amn-50uH-5ohm', 'amn-50uH', 'amn-5uH-1ohm', 'an-5uH'] as const;
 
 const named = { id: id('the id of the source'), label };
 
-const source = byKind('the source', SOURCE_KINDS, [
-	branch('the network', {
-		...named,
-		kind: z.enum(['amn-50uH-5ohm', 'amn-50uH', 'amn-5uH-1ohm', 'an-5uH']),
-		networks: z.literal([1, 2], { error: 'Enter the number of networks in the loop: 1 or 2.' })
-	}),
-	branch('the source impedance', {
-		...named,
-		kind: z.literal('impedance'),
-		inductanceMin_H: inductance('the lowest source inductance'),
-		inductanceMax_H: inductance('the highest source inductance'),
-		resistance_ohm: loss('the source resistance')
-	}),
-	branch('the measured source', { ...named, kind: z.literal('measured'), curve })
-]);
+const source = byKind(
+	'the source',
+	[...NETWORK_KINDS, 'impedance', 'measured'],
+	[
+		branch('the network', {
+			...named,
+			kind: z.enum(NETWORK_KINDS),
+			networks: z.literal([1, 2], { error: 'Enter the number of networks in the loop: 1 or 2.' })
+		}),
+		branch('the source impedance', {
+			...named,
+			kind: z.literal('impedance'),
+			inductanceMin_H: inductance('the lowest source inductance'),
+			inductanceMax_H: inductance('the highest source inductance'),
+			resistance_ohm: loss('the source resistance')
+		}),
+		branch('the measured source', { ...named, kind: z.literal('measured'), curve })
+	]
+);
 
 const reading = (words: string) => quantity(words, 'resistance', { from: -1e12, to: 1e12 });
 const POINTS = 5000;
+const DIGEST = 'Enter the SHA-256 of the measured file: 64 digits 0–9 and a–f.';
 
 const measured = branch('the measured curve', {
 	id: curve,
 	label,
 	fileName: text('the name of the measured file', { most: 120 }),
-	sha256: z
-		.string({ error: 'Enter the SHA-256 of the measured file: 64 digits 0–9 and a–f.' })
-		.check(
-			z.regex(/^[0-9a-f]{64}$/, { error: 'Enter the SHA-256 of the measured file: 64 digits 0–9 and a–f.' })
-		),
+	sha256: z.string({ error: DIGEST }).check(z.regex(/^[0-9a-f]{64}$/, { error: DIGEST })),
 	frequency_Hz: list(
 		'frequencies',
 		quantity('the frequency', 'frequency', { from: 1e-3, to: 1e12 }),
@@ -199,8 +193,21 @@ const design = branch('the design', {
 
 export const designSchema: z.ZodMiniType<Design> = design;
 
-const isPart = (properties: object | undefined): boolean =>
-	properties !== undefined && 'tolerance' in properties;
+/** What a part's checks hold beyond its shape, by a key that only such a part has. */
+const CONDITIONS: Readonly<Record<string, z.core.JSONSchema.BaseSchema>> = {
+	tolerance: {
+		oneOf: [
+			{ required: ['tolerance'], properties: { toleranceMinus: false, tolerancePlus: false } },
+			{ required: ['toleranceMinus', 'tolerancePlus'], properties: { tolerance: false } }
+		]
+	},
+	voltageMax_V: {
+		if: { properties: { kind: { const: 'ac' } } },
+		then: { required: ['frequency_Hz', 'frequencyMax_Hz'] },
+		else: { properties: { frequency_Hz: false, frequencyMax_Hz: false } }
+	},
+	limit: { if: { properties: { limit: { const: 'table' } } }, then: { required: ['table'] } }
+};
 
 /**
  * Writes the design file's shape as JSON Schema; what holds across fields is told in words only.
@@ -212,12 +219,13 @@ export function designJsonSchema(): z.core.JSONSchema.BaseSchema {
 	return {
 		title: 'Herringbone design, format version 1',
 		description:
-			'SI base units, the unit in the key; tolerances are fractions; ac voltages are rms. Beyond this schema: ac supplies need both line frequencies and dc supplies have none, lowest values are not above highest ones, ids are unique and references exist, sources × switching × harmonics is at most 240.',
+			'SI base units, the unit in the key; tolerances are fractions; ac voltages are rms. Beyond this schema: lowest values are not above highest ones, ids are unique and references exist, sources × switching × harmonics is at most 240.',
 		...z.toJSONSchema(design, {
 			io: 'input',
 			override: ({ jsonSchema }) => {
-				if (!isPart(jsonSchema.properties)) return;
-				jsonSchema.oneOf = [{ required: ['tolerance'] }, { required: ['toleranceMinus', 'tolerancePlus'] }];
+				for (const [key, condition] of Object.entries(CONDITIONS)) {
+					if (key in (jsonSchema.properties ?? {})) Object.assign(jsonSchema, condition);
+				}
 			}
 		})
 	};
