@@ -56,9 +56,11 @@ const readEnds = (text: LayoutText, layout: Record<string, unknown>): Issue[] =>
  * @example readLayoutText({ paper: 'A4', orientation: 'portrait', decade_mm: '28 mm' })
  */
 export function readLayoutText(text: LayoutText): Read<Layout> {
-	const layout: Record<string, unknown> = {};
-	for (const key of WORDS) if ((text[key] ?? '') !== '') layout[key] = text[key];
-	for (const key of SWITCHES) if ((text[key] ?? '') !== '') layout[key] = text[key] === 'yes';
+	const stated = (key: string): boolean => (text[key] ?? '') !== '';
+	const layout: Record<string, unknown> = Object.fromEntries([
+		...WORDS.filter(stated).map((key) => [key, text[key]] as const),
+		...SWITCHES.filter(stated).map((key) => [key, text[key] === 'yes'] as const)
+	]);
 	const issues = [...readDecade(text.decade_mm?.trim() ?? '', layout), ...readEnds(text, layout)];
 	const parsed = parseLayout(layout);
 	if (parsed.ok && issues.length === 0) return { ok: true, value: parsed.layout };

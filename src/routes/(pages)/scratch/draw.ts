@@ -62,7 +62,7 @@ const readPart = <Value>(place: string, tree: Tree, good: Tree, read: Reader<Val
 	const first = read(typed);
 	if (first.ok) return { value: first.value, issues: [], good: typed };
 	const issues = first.issues.map((issue) => ({ ...issue, pointer: place + issue.pointer }));
-	let mended = typed;
+	let mended: Tree = typed;
 	let refused: readonly Issue[] = first.issues;
 	for (let round = 0; round < ROUNDS; round += 1) {
 		mended = mend(mended, before, refused);

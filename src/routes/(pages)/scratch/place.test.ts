@@ -4,7 +4,7 @@ import { fieldIds, rowName } from './place';
 
 describe('rows of pointers', () => {
 	it.each([
-		['/design/supply/voltage_V', '1 Supply'],
+		['/design/supply/voltage_V', '1.1 Supply'],
 		['/design/switching/1/harmonics', '2.2 Switching'],
 		['/design/switching', '2 Converter'],
 		['/design/inductor/inductance_H', '3.1 Inductor'],

@@ -35,7 +35,9 @@ export class Worksheet {
 	readonly canRedo = $derived(this.#past.after.length > 0);
 	readonly sheet = $derived(this.#drawn.sheet);
 	readonly issues = $derived(this.#drawn.issues);
-	readonly #issueAt = $derived(new Map(this.issues.map(({ pointer, detail }) => [pointer, detail])));
+	readonly #issueAt = $derived(
+		Object.fromEntries(this.issues.map(({ pointer, detail }) => [pointer, detail]))
+	);
 
 	text(at: string): string {
 		return textAt(this.tree, at);
@@ -46,7 +48,7 @@ export class Worksheet {
 	}
 
 	issue(at: string): string | undefined {
-		return this.#issueAt.get(at);
+		return this.#issueAt[at];
 	}
 
 	/** The text that counts while what stands at a place cannot be read. */
@@ -111,15 +113,11 @@ export class Worksheet {
 		this.#past = past;
 		this.behind = true;
 		this.onchange(past.now);
-		this.#frame ??= requestAnimationFrame(() => {
+		if (this.#frame !== null) return;
+		this.#frame = requestAnimationFrame(() => {
 			this.#frame = null;
 			this.#drawn = draw(this.tree, this.#drawn.good);
 			this.behind = false;
 		});
-	}
-
-	/** Issues that no field of the form shows by itself are told by the list alone. */
-	issuesUnder(at: string): readonly Issue[] {
-		return this.issues.filter(({ pointer }) => pointer === at || pointer.startsWith(`${at}/`));
 	}
 }
