@@ -58,6 +58,14 @@ export function publishedFace(face: Face) {
 	return { bytes: new Uint8Array(bytes), reader };
 }
 
+/** @returns advance widths of the characters in the published face, figures of equal width [1/1000 of the font size] */
+export function widthsOf(face: Face): number[] {
+	const { reader } = publishedFace(face);
+	return [...CHARACTERS].map(
+		(character) => reader.layout(character, /\d/.test(character) ? ['tnum'] : []).glyphs[0]?.advanceWidth ?? 0
+	);
+}
+
 /** @returns the sheet's cut of a face, a TrueType file */
 export function makeFace(face: Face): Uint8Array {
 	const { bytes, reader } = publishedFace(face);

@@ -27,7 +27,7 @@ const decimal = (value: number, places: number): string => {
 /** `#rrggbb` as components from 0 to 1; one component for a grey. */
 const componentsOf = (colour: string): string[] => {
 	if (!/^#[0-9a-f]{6}$/i.test(colour)) throw new RangeError(`colour must be #rrggbb, got ${colour}`);
-	const parts = [1, 3, 5].map((at) => decimal(parseInt(colour.slice(at, at + 2), 16) / 255, 4));
+	const parts = [1, 3, 5].map((at) => decimal(parseInt(colour.slice(at, at + 2), 16) / 255, 3));
 	return new Set(parts).size === 1 ? parts.slice(0, 1) : parts;
 };
 

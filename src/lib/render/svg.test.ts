@@ -64,6 +64,20 @@ describe('toSvg', () => {
 		expect(marks(toSvg(scene([item])))).toEqual([expected]);
 	});
 
+	it('keeps spaces that SVG would drop or join', () => {
+		const text: Item = {
+			type: 'text',
+			text: ' a  b c ',
+			x: 0,
+			y: 0,
+			cap: 1,
+			face: 'bold',
+			fill: '#000000',
+			anchor: 'end'
+		};
+		expect(toSvg(scene([text]))).toContain('>\u00a0a \u00a0b c\u00a0</text>');
+	});
+
 	it('writes one mark for each item, and no style attribute', () => {
 		fc.assert(
 			fc.property(fc.array(fc.nat(), { maxLength: 20 }), (seeds) => {

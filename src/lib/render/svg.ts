@@ -48,6 +48,9 @@ const pathElement = (item: PathItem): string =>
 	(item.stroke === undefined ? '' : strokeText(item.stroke)) +
 	'/>\n';
 
+/** Spaces that SVG would drop or join become ones that do not break, which are as wide. */
+const kept = (text: string): string => text.replace(/^ | $|(?<= ) /g, '\u00a0');
+
 const textElement = (item: TextItem): string =>
 	`<text${markText(item)}${attribute('x', item.x)}${attribute('y', item.y)}` +
 	attribute('font-size', item.cap / CAP_RATIO) +
@@ -57,7 +60,7 @@ const textElement = (item: TextItem): string =>
 	(item.angle === undefined || item.angle === 0
 		? ''
 		: ` transform="rotate(${[item.angle, item.x, item.y].map(written).join(' ')})"`) +
-	`>${escapeXml(normaliseText(item.text))}</text>\n`;
+	`>${escapeXml(kept(normaliseText(item.text)))}</text>\n`;
 
 const groupElement = (item: Group): string =>
 	`<g${markText(item)}>\n${item.items.map(element).join('')}</g>\n`;
@@ -87,7 +90,7 @@ export function toSvg(scene: Scene, options: { readonly fontCss?: string } = {})
 	return (
 		`<svg xmlns="http://www.w3.org/2000/svg" width="${width}mm" height="${height}mm" viewBox="0 0 ${width} ${height}"` +
 		` role="img" aria-labelledby="sheet-title" aria-describedby="sheet-description"${attribute('lang', scene.language)}${attribute('xml:lang', scene.language)}` +
-		` font-family="${FONT_FAMILY}, Barlow, sans-serif" font-weight="400" font-kerning="none" xml:space="preserve">\n` +
+		` font-family="${FONT_FAMILY}, Barlow, sans-serif" font-weight="400" font-kerning="none">\n` +
 		`<title id="sheet-title">${escapeXml(scene.title)}</title>\n` +
 		`<desc id="sheet-description">${escapeXml(scene.description)}</desc>\n` +
 		`<metadata>${metadata}</metadata>\n` +

@@ -1,4 +1,4 @@
-/** Written by tests/reference/print-faces: the characters of the shipped faces and their advance widths. */
+/** The characters of the shipped faces and their advance widths, held to the files by tests/reference/print-faces.test.ts. */
 import type { Face } from './scene';
 
 /** In order of code points. */
