@@ -34,7 +34,7 @@ async function download(page: Page, name: string): Promise<{ name: string; bytes
 
 const upload = async (page: Page, name: string, content: string): Promise<void> => {
 	await page
-		.getByLabel('Design file', { exact: true })
+		.getByLabel('Design file to open')
 		.setInputFiles({ name, mimeType: 'application/json', buffer: Buffer.from(content) });
 };
 
@@ -59,7 +59,7 @@ describe('the scratch sheet', () => {
 		await page.getByText('253–396 nF').first().waitFor();
 		await page.getByText('281–360 nF').first().waitFor();
 		await page.getByRole('button', { name: 'Take 330 nF' }).first().press('Enter');
-		await page.getByText('Allowed with its whole tolerance').waitFor();
+		await page.getByText('Allowed with its whole tolerance').first().waitFor();
 		expect(await page.getByText('+21.8').count()).toBeGreaterThan(0);
 		const { name, bytes } = await download(page, 'Print as PDF');
 		expect(name).toBe('charger-auxiliary-supply.pdf');
@@ -85,26 +85,31 @@ describe('the scratch sheet', () => {
 		await close();
 	});
 
-	it.each([
-		['', 'Capacitor C at the converter'],
-		['100', 'Capacitor C at the converter'],
-		['-1 µF', 'Capacitor C at the converter'],
-		['0 H', 'Inductor L at full current'],
-		['NaN', 'Inductor L at full current'],
-		['1e400 H', 'Inductor L at full current'],
-		['😀', 'Voltage U nominal, rms'],
-		['41', '2.1 harmonics'],
-		['1 V', 'Voltage U highest, rms'],
-		['100 %', 'Inductor L minus']
-	])('asks again about “%s” in %s', async (text, label) => {
+	it('asks again about everything that cannot be right, one question at a time', async () => {
 		const { page, complaints, close } = await openScratch();
-		await write(page, label, text);
-		if (text === '') await page.keyboard.press('Delete');
-		const field = page.getByLabel(label, { exact: true });
-		await page.getByRole('heading', { name: /need(s)? another look$/ }).waitFor();
-		expect(await field.inputValue()).toBe(text);
-		const echo = await field.getAttribute('aria-describedby');
-		expect(await page.locator(`#${echo ?? ''}`).textContent()).toMatch(/\w/);
+		const heading = page.getByRole('heading', { name: /need(s)? another look$/ });
+		for (const [text, label] of [
+			['', 'Capacitor C at the converter'],
+			['100', 'Capacitor C at the converter'],
+			['-1 µF', 'Capacitor C at the converter'],
+			['0 H', 'Inductor L at full current'],
+			['NaN', 'Inductor L at full current'],
+			['1e400 H', 'Inductor L at full current'],
+			['😀', 'Voltage U nominal, rms'],
+			['41', '2.1 harmonics'],
+			['1 V', 'Voltage U highest, rms'],
+			['100 %', 'Inductor L minus']
+		] as const) {
+			await write(page, label, text);
+			if (text === '') await page.keyboard.press('Delete');
+			await heading.waitFor();
+			const field = page.getByLabel(label, { exact: true });
+			expect(await field.inputValue()).toBe(text);
+			const echo = (await field.getAttribute('aria-describedby')) ?? '';
+			expect(await page.locator(`#${echo}`).textContent(), `${label}: ${text}`).toMatch(/\w/);
+			await page.keyboard.press('Escape');
+			await heading.waitFor({ state: 'detached' });
+		}
 		expect(complaints).toEqual([]);
 		await close();
 	});
