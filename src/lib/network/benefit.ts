@@ -16,7 +16,7 @@ export const LOWEST_GAIN_DB = -200;
  * @param frequency [Hz], > 0
  * @returns impedance [Ω]; 0 for a short-circuited source, Infinity at a lossless parallel resonance
  * @throws RangeError when frequency is not > 0; OutsideCurveError where a curve was not measured
- * @example // 33 µH, 4.7 µF, two 50 µH networks at 145 kHz: 5.171 + 21.28j Ω
+ * @example // 33 µH, 4.7 µF, two 50 µH networks at 145 kHz: 5.345 + 21.19j Ω
  * nodeImpedance(filter, sourceImpedance({ kind: 'amn-50uH-5ohm', networks: 2 }, 145e3), 145e3)
  */
 export function nodeImpedance(filter: Filter, sourceZ: Complex, frequency: number): Complex {

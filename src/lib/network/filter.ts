@@ -104,7 +104,7 @@ export function filterImpedance(filter: Filter, frequency: number): Complex {
  * @param frequency [Hz], > 0
  * @returns admittance [S]
  * @throws RangeError when frequency is not > 0; OutsideCurveError where a curve was not measured
- * @example // 33 µH, 4.7 µF, two 50 µH networks at 145 kHz: 0.01078 − 0.04437j S
+ * @example // 33 µH, 4.7 µF, two 50 µH networks at 145 kHz: 0.01119 − 0.04437j S
  * nodeAdmittance(filter, sourceImpedance({ kind: 'amn-50uH-5ohm', networks: 2 }, 145e3), 145e3)
  * @see Norton's theorem at the line-side node
  */

@@ -33,9 +33,11 @@ export function goldenMinimum(of: (x: number) => number, from: number, to: numbe
 	return atLeft <= atRight ? left : right;
 }
 
-/** The point at a share of the way; the middle where the share is of no use. */
-const nextGuess = (low: number, high: number, share: number): number =>
-	share > 0 && share < 1 ? low + share * (high - low) : (low + high) / 2;
+/** The point at a share of the way; the middle where that is not between the ends. */
+const nextGuess = (low: number, high: number, share: number): number => {
+	const guess = low + share * (high - low);
+	return guess > low && guess < high ? guess : (low + high) / 2;
+};
 
 /**
  * Where a function changes its sign between two ends, by false position with halved weights (Illinois rule) and

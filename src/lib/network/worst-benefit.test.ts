@@ -1,9 +1,12 @@
 import * as fc from 'fast-check';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { benefitAt, benefitFinder, worstBenefit } from './benefit';
 import type { CapacitorPart, Filter } from './filter';
 import { capacitorCurrent, currentFinder } from './ripple';
 import { sourceImpedance, type SourceModel } from './source';
+
+// Many networks are sampled densely; a busy machine needs its time.
+vi.setConfig({ testTimeout: 60_000 });
 
 /** A decade span, evenly in the logarithm. */
 const logs = (from: number, to: number) =>

@@ -234,7 +234,7 @@ const merged = (intervals: readonly Interval[]): Interval[] => {
  * @param range frequencies from ≤ to [Hz], > 0
  * @returns intervals of C0 [F] in order, 0 and Infinity possible; none where nothing resonates
  * @throws RangeError when the range is empty or not positive; OutsideCurveError where a curve was not measured
- * @example // 220 µH ±15 %, 2.2 µF ±10 %, two 50 µH networks, 126 to 138 kHz: 18.64 nF to 24.50 nF
+ * @example // 220 µH ±15 %, 2.2 µF ±10 %, two 50 µH networks, 126 to 138 kHz: 18.40 nF to 24.27 nF
  * exactWorstRange(box, { kind: 'amn-50uH-5ohm', networks: 2 }, { from: 126e3, to: 138e3 })
  * @see extremes over L, C and Ls in closed form; checked by dense sampling in its tests
  */
