@@ -6,19 +6,22 @@ import { uniteOpen } from '$lib/quantity/interval';
 import type { Item } from '$lib/scene/scene';
 import { edgePen, ruleNumber, type Edge } from './band-edge';
 import { clearOfLabels, fallsOf, penOf, segmentsPath, type Board } from './board';
-import { dotCentres, HATCH_SPECK, dotRadius, hatchLines, roundDots } from './hatch';
+import { dotCentres, dotPath, dotRadius, HATCH_SPECK, hatchLines } from './hatch';
 import type { Pen } from './ink';
 import { capacitanceLine } from './plot';
-import { fallStrip, polygonPath, type Polygon } from './polygon';
+import { fallStrip, polygonPath } from './polygon';
 import { group } from './pen';
 import { stripsOf, type Strip } from './zones';
 
 const hatchOf = (board: Board, strips: readonly Strip[]): number[] => {
 	const { plot } = board.input;
-	return strips.flatMap((strip) => {
+	const lines: number[] = [];
+	for (const strip of strips) {
 		const polygon = fallStrip(plot, strip.from, strip.to);
-		return polygon.length === 0 ? [] : hatchLines(polygon, strip.class, strip.density, board.k);
-	});
+		if (polygon.length === 0) continue;
+		for (const value of hatchLines(polygon, strip.class, strip.density, board.k)) lines.push(value);
+	}
+	return lines;
 };
 
 /** Deep of the fringe on an edge that closes no window, at k = 1 [mm]. */
@@ -70,17 +73,34 @@ export function hatchItems(board: Board, edges: readonly Edge[]): Item[] {
 	return items.length === 0 ? [] : [group(items, { role: 'band' })];
 }
 
-/** The advisory band's pieces inside what is left: elsewhere something stronger forbids already. */
-const advisedPolygons = (board: Board, finding: Finding): Polygon[] => {
+/** Deep of the dense dots beside the ends of an advisory piece, at k = 1, square to them [mm]. */
+const DOTTED_DEPTH = 5;
+
+/** The advisory band's pieces inside what is left, as y − x: elsewhere something stronger forbids already. */
+const advisedSpans = (board: Board, finding: Finding): (readonly [number, number])[] => {
 	const fall = fallsOf(board);
 	return uniteOpen(finding.bands).flatMap((band) =>
 		board.zones
 			.filter((zone) => zone.class === null)
 			.map((zone) => [Math.max(zone.from, band.from), Math.min(zone.to, band.to)] as const)
 			.filter(([from, to]) => from < to)
-			.map(([from, to]) => fallStrip(board.input.plot, fall(from), fall(to)))
-			.filter((polygon) => polygon.length > 0)
+			.map(([from, to]) => [fall(from), fall(to)] as const)
 	);
+};
+
+const dotsOf = (board: Board, [from, to]: readonly [number, number]): number[] => {
+	const { plot } = board.input;
+	const deep = DOTTED_DEPTH * board.k * Math.SQRT2;
+	const dots = (start: number, end: number, density: 'bank' | 'field'): number[] => {
+		const polygon = start < end ? fallStrip(plot, start, end) : [];
+		return polygon.length === 0 ? [] : dotCentres(polygon, board.k, density);
+	};
+	if (to - from < 2 * deep) return dots(from, to, 'bank');
+	return [
+		...dots(from, from + deep, 'bank'),
+		...dots(from > -Infinity ? from + deep : from, to < Infinity ? to - deep : to, 'field'),
+		...dots(to - deep, to, 'bank')
+	];
 };
 
 const clearDots = (board: Board, centres: readonly number[]): number[] => {
@@ -102,11 +122,11 @@ const dotItems = (board: Board, finding: Finding): Item[] => {
 	if (closesWindows(finding)) return [];
 	const centres = clearDots(
 		board,
-		advisedPolygons(board, finding).flatMap((polygon) => dotCentres(polygon, board.k))
+		advisedSpans(board, finding).flatMap((span) => dotsOf(board, span))
 	);
 	if (centres.length === 0) return [];
-	const d = roundDots(centres, dotRadius(board.k));
-	return [{ type: 'path', d, fill: board.input.ink.advisory }];
+	const stroke = { colour: board.input.ink.advisory, width: 2 * dotRadius(board.k), cap: 'round' } as const;
+	return [{ type: 'path', d: dotPath(centres), stroke }];
 };
 
 const thumbLines = (board: Board, finding: Finding): Item[] =>

@@ -2,6 +2,7 @@
 import type { Design } from '$lib/design/design';
 import type { Finding, Window } from '$lib/rules/finding';
 import type { PathData, Stroke, TextItem } from '$lib/scene/scene';
+import { simplify } from '$lib/scene/simplify';
 import type { ChartInput } from './chart';
 import { strokeOf, type Pen } from './ink';
 import { fieldOf, placeLabel, type Field, type Label, type Place } from './label';
@@ -124,6 +125,28 @@ export function segmentsPath(segments: readonly number[]): PathData {
 		at.push(endX, endY);
 	}
 	return { ops, at };
+}
+
+/** Points of a curve nearer than this to what is drawn are left out [mm]. */
+const SMOOTH = 0.02;
+
+/**
+ * Joins the segments of a traced curve into one path with no more points than its bends need.
+ * @param segments x1, y1, x2, y2 of each, one after the other [mm]
+ * @returns path data
+ * @example curvePath([0, 0, 1, 0, 1, 0, 2, 0]).at // [0, 0, 2, 0]
+ * Source: Douglas and Peucker, through simplify.
+ */
+export function curvePath(segments: readonly number[]): PathData {
+	const { ops, at } = segmentsPath(segments);
+	const runs = ops.split('M').slice(1);
+	let next = 0;
+	const kept = runs.map((run) => {
+		const count = 2 * (run.length + 1);
+		next += count;
+		return simplify(at.slice(next - count, next), SMOOTH);
+	});
+	return { ops: kept.map((points) => `M${'L'.repeat(points.length / 2 - 1)}`).join(''), at: kept.flat() };
 }
 
 /** Segments with the room of all lettering taken out. */

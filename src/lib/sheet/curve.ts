@@ -2,7 +2,7 @@
 import { magnitude } from '$lib/network/complex';
 import { covers, impedanceAt, impedanceCurve } from '$lib/network/curve';
 import type { Item } from '$lib/scene/scene';
-import { capOf, clearOfLabels, penOf, segmentsPath, settle, type Board } from './board';
+import { capOf, clearOfLabels, penOf, curvePath, settle, type Board } from './board';
 import { shorten } from './fitting';
 import { ON_LINE, roomOf, type Label, type Place } from './label';
 import { keepInside } from './oriented';
@@ -152,7 +152,7 @@ export function measuredItems(board: Board, lines: readonly MeasuredLine[]): Ite
 	return lines.map(({ label, segments }) => ({
 		type: 'path',
 		label,
-		d: segmentsPath(clearOfLabels(board, segments)),
+		d: curvePath(clearOfLabels(board, segments)),
 		stroke: { ...penOf(board, 'curve'), join: 'round' }
 	}));
 }

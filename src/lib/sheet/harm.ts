@@ -1,33 +1,11 @@
 /** A window that looks inviting although every value in it makes a line worse says so at the window itself. */
 import type { Window } from '$lib/rules/finding';
 import { capOf, settle, type Board } from './board';
-import { worstHarm, type Harm } from './benefit-curve';
+import type { Harm } from './benefit-curve';
 import { fixed, formatEdge } from './edge';
 import { alongSegment, roomOf, type Label } from './label';
 import { capacitanceLine } from './plot';
-
-/** A value that stands for the whole window: its target, or the edge it has. */
-const standIn = ({ from, to, target }: Window): number | null => {
-	if (target !== null) return target;
-	if (from > 0 && to < Infinity) return Math.sqrt(from * to);
-	if (from > 0) return from;
-	return to < Infinity ? to : null;
-};
-
-/** At the candidates where there are any, since only they can be chosen: the least harm that one can have. */
-const harmOf = (board: Board, window: Window, index: number): Harm | null => {
-	const { design, evaluation } = board.input;
-	if (design === null || evaluation === null) return null;
-	const candidates = evaluation.candidates.filter((candidate) => candidate.window === index);
-	const value = standIn(window);
-	const values = candidates.length > 0 ? candidates.map(({ capacitance }) => capacitance) : [value];
-	const harms = values.map((entry) => (entry === null ? null : worstHarm(design, entry)));
-	if (harms.some((harm) => harm === null)) return null;
-	return harms.reduce(
-		(least, harm) => (least === null || (harm?.gain ?? 0) > least.gain ? harm : least),
-		null
-	);
-};
+import { windowHarm } from './window-harm';
 
 const textOf = ({ input }: Board, harm: Harm): string => {
 	const gain = `${fixed(harm.gain, 1, input.decimalMark)}\u00a0dB`;
@@ -37,7 +15,9 @@ const textOf = ({ input }: Board, harm: Harm): string => {
 
 const settleHarm = (board: Board, window: Window, index: number): void => {
 	const { plot, ink } = board.input;
-	const harm = harmOf(board, window, index);
+	const { design, evaluation } = board.input;
+	if (design === null || evaluation === null) return;
+	const harm = windowHarm(design, evaluation, index);
 	if (harm === null) return;
 	const label: Label = {
 		text: textOf(board, harm),

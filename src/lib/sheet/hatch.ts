@@ -4,6 +4,7 @@
  */
 import type { RuleClass } from '$lib/design/design';
 import type { PathData } from '$lib/scene/scene';
+import { numberAt } from './oriented';
 import { chordOf, type Polygon } from './polygon';
 
 /** Rise above the level, counter-clockwise on paper [degree]. */
@@ -30,6 +31,11 @@ const normalOf = (angle: number): readonly [number, number] => {
 	const turn = (angle * Math.PI) / 180;
 	return [Math.sin(turn), Math.cos(turn)];
 };
+
+const NORMAL = {
+	mandatory: normalOf(HATCH_ANGLE.mandatory),
+	design: normalOf(HATCH_ANGLE.design)
+} as const;
 
 const rangeAlong = (polygon: Polygon, [a, b]: readonly [number, number]): readonly [number, number] => {
 	let least = Infinity;
@@ -58,13 +64,16 @@ export function hatchLines(
 	density: Density,
 	k: number
 ): number[] {
-	const normal = normalOf(HATCH_ANGLE[ruleClass]);
+	const normal = NORMAL[ruleClass];
+	const [a, b] = normal;
 	const pitch = PITCH * k * EVERY[density];
 	const [least, greatest] = rangeAlong(polygon, normal);
 	const lines: number[] = [];
 	for (let count = Math.ceil(least / pitch); count * pitch < greatest; count += 1) {
-		const chord = chordOf(polygon, [...normal, count * pitch]);
-		if (chord !== null && Math.hypot(chord[2] - chord[0], chord[3] - chord[1]) >= SPECK) lines.push(...chord);
+		const chord = chordOf(polygon, [a, b, count * pitch]);
+		if (chord === null) continue;
+		const [x1, y1, x2, y2] = chord;
+		if (Math.hypot(x2 - x1, y2 - y1) >= SPECK) lines.push(x1, y1, x2, y2);
 	}
 	return lines;
 }
@@ -91,12 +100,13 @@ const insideConvex = (polygon: Polygon, x: number, y: number, room: number): boo
  * Sets the dots of an advisory band on a triangular raster anchored to the paper.
  * @param polygon convex, corners clockwise on paper [mm]
  * @param k factor of the paper
+ * @param density dense beside an edge, every third dot of every third row beyond
  * @returns x and y of each dot that lies wholly inside [mm]
  * @example dotCentres([0, 0, 3, 0, 3, 3, 0, 3], 1).length > 0 // true
  * Source: common practice of drawing offices.
  */
-export function dotCentres(polygon: Polygon, k: number): number[] {
-	const pitch = DOT_PITCH * k;
+export function dotCentres(polygon: Polygon, k: number, density: 'bank' | 'field' = 'bank'): number[] {
+	const pitch = DOT_PITCH * k * (density === 'bank' ? 1 : 3);
 	const rise = (pitch * Math.sqrt(3)) / 2;
 	const [left, right] = rangeAlong(polygon, [1, 0]);
 	const [top, foot] = rangeAlong(polygon, [0, 1]);
@@ -132,6 +142,26 @@ export function roundDots(centres: readonly number[], radius: number): PathData 
 		at.push(x + c, y - radius, x + radius, y - c, x + radius, y);
 	}
 	return { ops: 'MCCCCZ'.repeat(centres.length / 2), at };
+}
+
+/** A line this short with round ends prints as a dot in every reader [mm]. */
+const DOT_LENGTH = 0.01;
+
+/**
+ * Draws the dots of an advisory band as short strokes with round ends.
+ * @param centres x and y of each [mm]
+ * @returns path data to stroke with the dot's diameter
+ * @example dotPath([1, 2]).ops // 'ML'
+ * Source: scene format.
+ */
+export function dotPath(centres: readonly number[]): PathData {
+	const at: number[] = [];
+	for (let index = 0; index < centres.length; index += 2) {
+		const x = numberAt(centres, index);
+		const y = numberAt(centres, index + 1);
+		at.push(x, y, x + DOT_LENGTH, y);
+	}
+	return { ops: 'ML'.repeat(centres.length / 2), at };
 }
 
 /** Radius of an advisory dot [mm]. */

@@ -117,6 +117,10 @@ const wordingsOf = (board: Board, entry: Switching): Wording[] => {
 	];
 };
 
+/** The lowest frequency is written to the left of its band, others to the right, so that they part. */
+const leftmost = ({ input }: Board, entry: Switching): boolean =>
+	(input.design?.switching ?? []).every((other) => centreOf(other) >= centreOf(entry));
+
 /** Symbol with its index, and the value where there is room for it; null where even the symbol finds none. */
 const headingOf = (board: Board, entry: Switching, taken: readonly Taken[]): Heading | null => {
 	const { plot } = board.input;
@@ -125,10 +129,9 @@ const headingOf = (board: Board, entry: Switching, taken: readonly Taken[]): Hea
 	const away = (ELBOW + 0.8) * k;
 	const places = wordingsOf(board, entry).flatMap((wording) => {
 		const { width } = measured(board, wording);
-		return [
-			{ wording, side: -1, span: { from: x - away - width, to: x - away } },
-			{ wording, side: 1, span: { from: x + away, to: x + away + width } }
-		];
+		const left = { wording, side: -1, span: { from: x - away - width, to: x - away } };
+		const right = { wording, side: 1, span: { from: x + away, to: x + away + width } };
+		return leftmost(board, entry) ? [left, right] : [right, left];
 	});
 	const room = ({ from, to }: Taken): Taken => ({ from: Math.min(from, x), to: Math.max(to, x) });
 	const place = places.find(({ span }) => span.from >= plot.x - 0.5 * k && free(taken, room(span)));

@@ -139,13 +139,22 @@ const pushPiece = (pieces: number[], { segments, index, speck }: Piece, [from, t
 	else pieces.push(x + to * dx, y + to * dy);
 };
 
+const NONE: readonly Inside[] = [];
+
 /** Parts of one segment inside any of the boxes, by their start; empty for most segments. */
-const coveredParts = (segments: readonly number[], index: number, boxes: readonly Oriented[]): Inside[] => {
-	const parts: Inside[] = [];
+const coveredParts = (
+	segments: readonly number[],
+	index: number,
+	boxes: readonly Oriented[]
+): readonly Inside[] => {
+	let parts: Inside[] | null = null;
 	for (const box of boxes) {
 		const inside = apart(box, segments, index) ? null : insideOf(box, segments, index);
-		if (inside !== null) parts.push(inside);
+		if (inside === null) continue;
+		if (parts === null) parts = [inside];
+		else parts.push(inside);
 	}
+	if (parts === null) return NONE;
 	return parts.length > 1 ? parts.sort((a, b) => a[0] - b[0]) : parts;
 };
 

@@ -2,7 +2,7 @@
 import { formatQuantity } from '$lib/quantity/format';
 import type { Item, Stroke, TextItem } from '$lib/scene/scene';
 import { benefitCurves, type BenefitCurve } from './benefit-curve';
-import { capOf, penOf, segmentsPath, type Board } from './board';
+import { capOf, penOf, curvePath, type Board } from './board';
 import { fixed } from './edge';
 import { aroundPoint, placeLabel, roomOf, type Field, type Label, type Place } from './label';
 import { cutAtBoxes, keepInside } from './oriented';
@@ -88,7 +88,7 @@ const curveName = (below: Below, curve: BenefitCurve): string => {
 	const order = `n = ${String(curve.line.harmonic)}`;
 	const several = (design?.switching.length ?? 1) > 1;
 	const entry = several ? ` 2.${String(1 + (design?.switching.indexOf(curve.line.switching) ?? 0))}` : '';
-	return curve.line.harmonic === 1 ? `${sourceNumber(below, curve)} ${order}${entry}` : order;
+	return curve.line.harmonic === 1 ? `${sourceNumber(below, curve)}${entry} ${order}` : order;
 };
 
 const labelOf = ({ board }: Below, text: string, curve: BenefitCurve): Label => ({
@@ -228,6 +228,6 @@ export function benefitItems(below: Below, curves: readonly DrawnCurve[]): Item[
 		if (clear.length === 0) return [];
 		const label = `${curve.source.label}, n = ${String(curve.line.harmonic)}`;
 		const of = `source:${curve.source.id}`;
-		return [{ type: 'path', role: 'benefit', of, label, d: segmentsPath(clear), stroke }];
+		return [{ type: 'path', role: 'benefit', of, label, d: curvePath(clear), stroke }];
 	});
 }

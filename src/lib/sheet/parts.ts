@@ -6,7 +6,7 @@ import { asymptoticInductance, sourceImpedance } from '$lib/network/source';
 import { formatQuantity } from '$lib/quantity/format';
 import { sourceModel } from '$lib/rules/circuit';
 import type { Item } from '$lib/scene/scene';
-import { capOf, clearOfLabels, penOf, segmentsPath, settleFirst, type Board } from './board';
+import { capOf, clearOfLabels, penOf, curvePath, settleFirst, type Board } from './board';
 import { tracePlaces, traced } from './curve';
 import { shorten } from './fitting';
 import type { Pen } from './ink';
@@ -149,7 +149,7 @@ export function partItems(board: Board, lines: readonly PartLine[]): Item[] {
 			role: 'component-line',
 			of,
 			label,
-			d: segmentsPath(segments),
+			d: curvePath(segments),
 			stroke: penOf(board, pen)
 		}));
 }

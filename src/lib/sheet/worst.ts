@@ -1,6 +1,5 @@
 /** Crosses where Cx would resonate with L and the source at the switching frequency, and the corner of L and C. */
 import type { Design, ResonanceGuardRule, Source } from '$lib/design/design';
-import { magnitude } from '$lib/network/complex';
 import { cornerFrequency, exactWorstCapacitance } from '$lib/network/resonance';
 import { sourceImpedance } from '$lib/network/source';
 import { formatQuantity } from '$lib/quantity/format';
@@ -89,7 +88,7 @@ export function settleCorner(board: Board): Item[] {
 	if (design === null) return [];
 	const { inductor, capacitor } = design;
 	const frequency = cornerFrequency(inductor.inductance_H, capacitor.capacitance_F);
-	const impedance = magnitude({ re: Math.sqrt(inductor.inductance_H / capacitor.capacitance_F), im: 0 });
+	const impedance = Math.sqrt(inductor.inductance_H / capacitor.capacitance_F);
 	const x = xOf(plot, frequency);
 	const y = yOf(plot, impedance);
 	if (!insidePlot(board, x, y)) return [];
