@@ -1,5 +1,5 @@
 /** The smallest change of one value that opens a nominal window again. */
-import type { Design } from '$lib/design/design';
+import type { Design, Rule } from '$lib/design/design';
 import type { Cure, Finding } from './finding';
 import { knobsOf, type Knob } from './knob';
 import { findingOf } from './table';
@@ -11,17 +11,37 @@ const REACH = [0.01, 0.02, 0.05, 0.1, 0.2, 0.35, 0.5, 0.75, 1, 1.4, 1.9, 2.5, 3.
 
 const CURE_DIGITS = 3;
 
-/** Evaluates a changed design, asking again only the rules that the change can reach and that close windows. */
+/** Tells whether a changed design has a nominal window. */
 type Trial = (changed: Design) => boolean;
 
-const trialOf = (findings: readonly Finding[], knob: Knob): Trial => {
+/** Rules that are worked out by a scan: asked last, and only so many times. */
+const isScanned = (rule: Rule): boolean =>
+	['minimum-benefit', 'ripple-current', 'input-stability'].includes(rule.kind) ||
+	(rule.kind === 'inrush-current' && rule.includeCapacitor);
+
+const MOST_SCANS = 80;
+
+/** What is left of the scans, shared by all that is tried for one cure. */
+interface Budget {
+	scans: number;
+}
+
+/** Asks again only what the change can reach, the quick rules first: once they leave nothing, the rest cannot help. */
+const trialOf = (findings: readonly Finding[], knob: Knob, budget: Budget): Trial => {
 	const asked = findings.filter(closesWindows);
 	return (changed) => {
-		const answers = asked.map((finding) => {
-			const rule = changed.rules.find(({ id }) => id === finding.rule);
-			return rule !== undefined && knob.reaches(rule) ? findingOf(changed, rule) : finding;
-		});
-		return leavesNominal(closingBands(answers), changed.choice);
+		const reached = changed.rules.filter((rule) => knob.reaches(rule));
+		const kept = asked.filter((finding) => !reached.some(({ id }) => id === finding.rule));
+		const again = reached.filter(({ id }) => asked.some((finding) => finding.rule === id));
+		const quick = again.filter((rule) => !isScanned(rule)).map((rule) => findingOf(changed, rule));
+		const soFar = closingBands([...kept, ...quick]);
+		const scanned = again.filter(isScanned);
+		if (!leavesNominal(soFar, changed.choice)) return false;
+		if (scanned.length === 0) return true;
+		budget.scans -= scanned.length;
+		if (budget.scans < 0) return false;
+		const slow = scanned.map((rule) => findingOf(changed, rule));
+		return leavesNominal([...soFar, ...closingBands(slow)], changed.choice);
 	};
 };
 
@@ -58,10 +78,13 @@ interface Bounds {
 	readonly open: number;
 }
 
-/** Bisects between a value that leaves none and one that opens a window. */
-const edge = (opens: (value: number) => boolean, bounds: Bounds): number => {
+/** Bisects between a value that leaves none and one that opens a window, as far as the rounding needs it. */
+const edge = (opens: (value: number) => boolean, direction: Knob['direction'], bounds: Bounds): number => {
 	let { shut, open } = bounds;
-	while (Math.abs(open / shut - 1) > 1e-6) {
+	while (
+		roundOutward(open, direction) !== roundOutward(shut, direction) &&
+		Math.abs(open / shut - 1) > 1e-7
+	) {
 		const middle = Math.sqrt(open * shut);
 		if (opens(middle)) open = middle;
 		else shut = middle;
@@ -83,12 +106,11 @@ const bracket = (opens: (value: number) => boolean, knob: Knob): Bounds | null =
 };
 
 /** The value rounded to the safe side, checked by evaluating the design with it. */
-const turned = (design: Design, findings: readonly Finding[], knob: Knob): number | null => {
-	const trial = trialOf(findings, knob);
+const turned = (design: Design, trial: Trial, knob: Knob): number | null => {
 	const opens = (value: number): boolean => trial(knob.turn(design, value));
 	const bounds = bracket(opens, knob);
 	if (bounds === null) return null;
-	const exact = edge(opens, bounds);
+	const exact = edge(opens, knob.direction, bounds);
 	let value = roundOutward(exact, knob.direction);
 	for (let step = 0; step < 3; step += 1) {
 		if (within(knob, value) && opens(value)) return value;
@@ -121,11 +143,12 @@ const cureFrom = ({ knob, value }: Turned): Cure => {
  */
 export function cureOf(design: Design, findings: readonly Finding[], rules: readonly string[]): Cure | null {
 	const knobs = knobsOf(design, rules);
+	const budget = { scans: MOST_SCANS };
 	for (const tier of ['part', 'factor'] as const) {
 		const found = knobs
 			.filter((knob) => knob.tier === tier)
 			.flatMap((knob): Turned[] => {
-				const value = turned(design, findings, knob);
+				const value = turned(design, trialOf(findings, knob, budget), knob);
 				return value === null ? [] : [{ knob, value, change: Math.abs(Math.log(value / knob.value)) }];
 			});
 		const best = found.reduce<Turned | null>(

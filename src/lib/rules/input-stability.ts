@@ -1,13 +1,12 @@
 /** The filter's output impedance against the converter's negative input resistance. */
 import type { Design, ImpedanceSource, InputStabilityRule } from '$lib/design/design';
-import type { CapacitorPart } from '$lib/network/filter';
-import { outputPeak } from '$lib/network/peak';
 import { capacitorPart, cornersOf, filterOf, firstGap, partCurves } from './circuit';
 import type { Finding } from './finding';
 import { computed, given, parts, symbol } from './formula';
 import { sourceOf } from './lines';
 import type { Method } from './method';
 import { evaluated, notApplicable, notEvaluated } from './outcome';
+import { outputPeak, type Corner } from './output-peak';
 import { scanBands } from './scan';
 import { bandsParts, worded } from './wording';
 
@@ -33,20 +32,14 @@ export const INPUT_STABILITY: Method = {
 /** The search begins here [Hz]. */
 const LOWEST = 10;
 
-/** Highest peak over the corners of L, C and the source's inductance, for any Cx [Ω]. */
-const highestPeak = (design: Design, source: ImpedanceSource): ((part: CapacitorPart) => number) => {
-	const lowestSwitching = Math.min(...design.switching.map((entry) => entry.frequencyMin_Hz));
-	const range = { from: LOWEST, to: lowestSwitching };
-	const { resistance_ohm: resistance, inductanceMin_H: least, inductanceMax_H: most } = source;
-	const corners = cornersOf(design).flatMap((filter) =>
-		[...new Set([most, least])].map((inductance) => ({
+const stabilityCorners = (design: Design, source: ImpedanceSource): Corner[] =>
+	cornersOf(design).flatMap((filter) =>
+		[...new Set([source.inductanceMin_H, source.inductanceMax_H])].map((inductance) => ({
 			filter,
-			model: { kind: 'impedance', resistance, inductanceMin: inductance, inductanceMax: inductance } as const
+			resistance: source.resistance_ohm,
+			inductance
 		}))
 	);
-	return (part) =>
-		Math.max(...corners.map(({ filter, model }) => outputPeak(filter, part, model, range).impedance));
-};
 
 /** Names what has no damping at all, because its peak has no bound. */
 const undamped = ({ damping, inductor, capacitor }: Design, source: ImpedanceSource): readonly string[] => {
@@ -84,11 +77,12 @@ export function inputStability(design: Design, rule: InputStabilityRule): Findin
 			`${source.label} is not given as inductance and resistance: name such a source.`
 		);
 	}
-	const range = { from: LOWEST, to: Math.min(...design.switching.map((entry) => entry.frequencyMin_Hz)) };
+	const lowest = Math.min(...design.switching.map((entry) => entry.frequencyMin_Hz));
+	const range = { from: Math.min(LOWEST, lowest), to: lowest };
 	const gap = firstGap(partCurves(filterOf(design)), [range]);
 	if (gap !== null) return notEvaluated(rule, INPUT_STABILITY, gap);
 	const limit = load.voltageMin_V ** 2 / load.power_W / rule.margin;
-	const peak = highestPeak(design, source);
+	const peak = outputPeak(stabilityCorners(design, source), range, limit);
 	const { curve: _, ...unmeasured } = design.choice;
 	const bands = scanBands((capacitance) => peak(capacitorPart(design, unmeasured, capacitance)) / limit);
 	const cause = `Output impedance above ${worded(limit, 'resistance')} on ${source.label}`;

@@ -93,7 +93,7 @@ export function rippleCurrent(design: Design, rule: RippleCurrentRule): Finding 
 	const lines = loadedLines(design, model);
 	const bands = scanBands(
 		(capacitance) => rms(lines, capacitorPart(design, unmeasured, capacitance)) / rule.limit_A,
-		cornersOf(design).flatMap((corner) => resonantCapacitances(corner, model, linesOf(design)))
+		resonantCapacitances(filter, model, linesOf(design))
 	);
 	const cause = `Ripple current above ${plain(rule.limit_A, 'current')} from ${source.label}`;
 	return evaluated(rule, RIPPLE_CURRENT, {

@@ -5,14 +5,19 @@ import type { Interval } from '$lib/quantity/interval';
 const SMALLEST = 1e-12;
 const LARGEST = 0.1;
 
-const COARSE_PER_DECADE = 10;
+const COARSE_PER_DECADE = 5;
 /** Cells in which the quantity may cross its limit are cut into this many: 40 points a decade. */
-const FINE = 4;
+const FINE = 8;
 
-/** A cell is left whole where both ends lie this far from the limit on one side … */
-const CLEAR = Math.log(3);
-/** … and differ from each other by less than this. */
-const CALM = Math.log(2);
+const WIDTH = Math.LN10 / COARSE_PER_DECADE;
+
+/** Points nearer than this to the one before are looked at once. */
+const SAME = 1e-6;
+
+/** A cell is left whole where both ends lie on one side of the limit, further from it than this … */
+const CLEAR = 0.2;
+/** … and than this many times the difference of its ends. */
+const CALM = 3;
 
 /** A place of the scan: ln C, and ln of the quantity over its limit, above 0 where it is forbidden. */
 interface Place {
@@ -20,11 +25,11 @@ interface Place {
 	readonly excess: number;
 }
 
-const isQuiet = (left: Place, right: Place): boolean =>
-	left.excess > 0 === right.excess > 0 &&
-	Math.abs(left.excess) > CLEAR &&
-	Math.abs(right.excess) > CLEAR &&
-	!(Math.abs(left.excess - right.excess) > CALM);
+const isQuiet = (left: Place, right: Place): boolean => {
+	if (left.excess > 0 !== right.excess > 0) return false;
+	const nearest = Math.min(Math.abs(left.excess), Math.abs(right.excess));
+	return nearest > CLEAR + CALM * Math.abs(left.excess - right.excess);
+};
 
 /** Logarithms without bound would spoil the search for the edge. */
 const bounded = (excess: number): number =>
@@ -33,17 +38,22 @@ const bounded = (excess: number): number =>
 const coarsePlaces = (excess: (at: number) => number, extra: readonly number[]): Place[] => {
 	const count = Math.round(Math.log10(LARGEST / SMALLEST)) * COARSE_PER_DECADE;
 	const even = Array.from({ length: count + 1 }, (_, index) => SMALLEST * 10 ** (index / COARSE_PER_DECADE));
-	const inside = extra.filter((value) => value > SMALLEST && value < LARGEST);
+	const known = [...extra].sort((a, b) => a - b);
+	// Between two neighbouring resonances there may be a way through that both ends hide.
+	const middles = known.slice(1).map((value, index) => Math.sqrt(value * (known[index] ?? value)));
+	const inside = [...known, ...middles].filter((value) => value > SMALLEST && value < LARGEST);
 	const sorted = [...even, ...inside].sort((a, b) => a - b);
-	return sorted.map((value) => ({ at: Math.log(value), excess: excess(Math.log(value)) }));
+	const apart = sorted.filter((value, index) => !(value < (sorted[index - 1] ?? 0) * (1 + SAME)));
+	return apart.map((value) => ({ at: Math.log(value), excess: excess(Math.log(value)) }));
 };
 
 const refined = (excess: (at: number) => number, coarse: readonly Place[]): Place[] =>
 	coarse.flatMap((place, index) => {
 		const left = coarse[index - 1];
 		if (left === undefined || isQuiet(left, place)) return [place];
-		const between = Array.from({ length: FINE - 1 }, (_, step) => {
-			const at = left.at + ((place.at - left.at) * (step + 1)) / FINE;
+		const pieces = Math.max(2, Math.ceil((FINE * (place.at - left.at)) / WIDTH));
+		const between = Array.from({ length: pieces - 1 }, (_, step) => {
+			const at = left.at + ((place.at - left.at) * (step + 1)) / pieces;
 			return { at, excess: excess(at) };
 		});
 		return [...between, place];

@@ -72,7 +72,7 @@ export function worstRanges(box: FilterBox, source: SourceModel, range: Interval
 }
 
 /**
- * Lists capacitances that resonate at the given lines with these very parts: the ends and the middle of each range.
+ * Lists capacitances that resonate at the given lines with these very parts: the middle of each range, and the ends of a wide one.
  * @param filter the other parts
  * @param source the source
  * @param lines frequency ranges [Hz]
@@ -94,6 +94,6 @@ export function resonantCapacitances(
 	};
 	return lines
 		.flatMap((line) => worstRanges(box, source, line))
-		.flatMap(({ from, to }) => [from, Math.sqrt(from * to), to])
+		.flatMap(({ from, to }) => (to < 2 * from ? [Math.sqrt(from * to)] : [from, Math.sqrt(from * to), to]))
 		.filter((value) => value > 0 && value < Infinity);
 }
