@@ -9,7 +9,7 @@ const ZONE_LINE = 0.35;
 const ZONE_CAP = 3.5;
 /** Depth of the zone strip and length of the centring marks outside the frame [mm]. */
 const ZONE_DEPTH = 5;
-/** A field narrower than this carries no sign [mm]. */
+/** A remainder narrower than this belongs to the field beside it [mm]. */
 const FIELD_LEAST = 8;
 
 /** Letters that are not taken for figures. */
@@ -34,17 +34,20 @@ interface Field {
 	readonly sign: string;
 }
 
+/** Borders of the fields, without those that would leave a sliver at an end. */
+const bordersOf = (length: number, from: number, to: number): number[] =>
+	fieldBorders(length, from, to).filter((at) => at - from >= FIELD_LEAST && to - at >= FIELD_LEAST);
+
 const fieldsOf = (
 	borders: readonly number[],
-	from: number,
-	to: number,
+	[from, to]: readonly [number, number],
 	sign: (n: number) => string
 ): Field[] => {
 	const ends = [from, ...borders, to];
-	return ends.slice(0, -1).flatMap((start, index) => {
-		const end = ends[index + 1] ?? to;
-		return end - start < FIELD_LEAST ? [] : [{ middle: (start + end) / 2, sign: sign(index) }];
-	});
+	return ends.slice(0, -1).map((start, index) => ({
+		middle: (start + (ends[index + 1] ?? to)) / 2,
+		sign: sign(index)
+	}));
 };
 
 const zoneItems = (paper: Paper, ink: Ink): Item[] => {
@@ -53,8 +56,8 @@ const zoneItems = (paper: Paper, ink: Ink): Item[] => {
 	const foot = frame.y + frame.height;
 	const top = frame.y - ZONE_DEPTH;
 	const side = right + ZONE_DEPTH;
-	const across = fieldBorders(paper.width, frame.x, right);
-	const down = fieldBorders(paper.height, frame.y, foot);
+	const across = bordersOf(paper.width, frame.x, right);
+	const down = bordersOf(paper.height, frame.y, foot);
 	const lines = [
 		...[
 			frame.x,
@@ -82,10 +85,10 @@ const zoneItems = (paper: Paper, ink: Ink): Item[] => {
 	const centre = right + FRAME_LINE / 2 + (ZONE_DEPTH - FRAME_LINE / 2) / 2;
 	return [
 		ruled(lines, { colour: ink.ink, width: ZONE_LINE, cap: 'square' }),
-		...fieldsOf(across, frame.x, right, (index) => String(index + 1)).map(({ middle, sign }) =>
+		...fieldsOf(across, [frame.x, right], (index) => String(index + 1)).map(({ middle, sign }) =>
 			lettered(sign, middle, baseline, lettering)
 		),
-		...fieldsOf(down, frame.y, foot, (index) => LETTERS[index] ?? '').map(({ middle, sign }) =>
+		...fieldsOf(down, [frame.y, foot], (index) => LETTERS[index] ?? '').map(({ middle, sign }) =>
 			lettered(sign, centre, middle + ZONE_CAP / 2, lettering)
 		)
 	];

@@ -14,6 +14,8 @@ const RESULT = 6.8;
 const BAR_HEIGHT = 3.4;
 const DECADES = 4;
 const RULE_ROWS = 5;
+/** Rows lower than this part of their full height have no room for the hint. */
+const HINT_LEAST = 0.95;
 /** Ruled lines for notes, and room under the last one. */
 const NOTE_LINES = 1;
 
@@ -45,9 +47,8 @@ const row = (context: BlankContext, number: string, name: readonly Run[], height
 	const line = { cap: CAP * k, fill: ink.ink };
 	return {
 		height: height * k,
-		optional: true,
 		draw: (x, y) => {
-			const base = y + Math.min(height - 1.6, 4.7) * k;
+			const base = y + Math.min(height - 1.3, 4.7) * k;
 			return [
 				...runItems([{ text: number }], { x, y: base, ...line }),
 				...runItems(name, { x: x + NUMBER_WIDTH * k, y: base, ...line }),
@@ -115,18 +116,28 @@ const hinted = (context: BlankContext, kind: RuleKind | null, block: Block): Blo
 	};
 };
 
-const ruleKinds = ({ design }: BlankContext): (RuleKind | null)[] => {
+const kindsOf = (design: Design | null): (RuleKind | null)[] => {
 	const kinds = design === null ? DEFAULT_RULES : design.rules.map(({ kind }) => kind);
 	return [...kinds, ...Array.from({ length: Math.max(0, RULE_ROWS - kinds.length) }, () => null)];
 };
 
-const ruleBlock = (context: BlankContext, kind: RuleKind | null, index: number): Block => {
+/**
+ * Counts the rule rows of a blank strip: one for each rule of the design, at least five.
+ * @param design if there is one
+ * @returns rows
+ * @example blankRules(null) // 5
+ */
+export function blankRules(design: Design | null): number {
+	return kindsOf(design).length;
+}
+
+const ruleBlock = (context: BlankContext, kind: RuleKind | null, index: number, scale: number): Block => {
 	const name = kind === null ? '' : context.words.rule[kind];
-	const block = row(context, `5.${String(index + 1)}`, [{ text: name, face: 'semibold' }], RULE);
-	return withBar(context, hinted(context, kind, block));
+	const block = row(context, `5.${String(index + 1)}`, [{ text: name, face: 'semibold' }], RULE * scale);
+	return withBar(context, hinted(context, scale < HINT_LEAST ? null : kind, block));
 };
 
-const given = (context: BlankContext): Block[] =>
+const given = (context: BlankContext, scale: number): Block[] =>
 	[
 		{ number: '1.1', name: symbol('U') },
 		{ number: '2.1', name: symbol('f', 'sw') },
@@ -134,32 +145,47 @@ const given = (context: BlankContext): Block[] =>
 		{ number: '3.2', name: symbol('C') },
 		{ number: '4.1', name: symbol('Z', 's') },
 		{ number: '4.2', name: [] }
-	].map(({ number, name }) => row(context, number, name, GIVEN));
+	].map(({ number, name }) => row(context, number, name, GIVEN * scale));
+
+/** How a blank strip is spaced. */
+export interface BlankWay {
+	/** Part of the full height of its rows, 0.76 … 1. */
+	readonly scale: number;
+	readonly notes: boolean;
+	/** Rule rows. */
+	readonly rules: number;
+}
+
+const noteBlocks = (context: BlankContext): Block[] => [
+	head(context, '', context.words.strip.notes),
+	...Array.from({ length: NOTE_LINES }, () => row(context, '', [], RESULT)),
+	{ height: RESULT * context.k, draw: () => [] }
+];
 
 /**
  * The rows of a blank strip.
  * @param context design if there is one, palette, words, scale, width of a row [mm]
+ * @param way height of its rows, notes, rule rows
  * @returns the blocks
- * @example blankBlocks(context)[0].heading // true
+ * @example blankBlocks(context, { scale: 1, notes: true, rules: 5 })[0].heading // true
  */
-export function blankBlocks(context: BlankContext): Block[] {
-	const { words } = context;
+export function blankBlocks(context: BlankContext, { scale, notes, rules }: BlankWay): Block[] {
+	const { words, design } = context;
 	const text = (name: string): Run[] => [{ text: name, face: 'semibold' }];
-	const rules = ruleKinds(context).map((kind, index) => ruleBlock(context, kind, index));
-	const notes = Array.from({ length: NOTE_LINES }, () => row(context, '', [], RESULT));
+	const result = RESULT * scale;
 	return [
 		head(context, '', words.strip.given),
-		...given(context),
+		...given(context, scale),
 		head(context, '5', words.strip.rules),
 		axisNote(context),
-		...rules,
+		...kindsOf(design)
+			.slice(0, rules)
+			.map((kind, index) => ruleBlock(context, kind, index, scale)),
 		head(context, '6', words.strip.windowAndChoice),
-		withBar(context, row(context, '6.1', text(words.strip.window), RESULT)),
-		withBar(context, row(context, '6.2', text(words.strip.nominal), RESULT)),
-		row(context, '6.3', symbol('C', 'x'), RESULT),
-		row(context, '6.4', text(words.strip.margins), RESULT),
-		head(context, '', words.strip.notes),
-		...notes,
-		{ height: RESULT * context.k, optional: true, draw: () => [] }
+		withBar(context, row(context, '6.1', text(words.strip.window), result)),
+		withBar(context, row(context, '6.2', text(words.strip.nominal), result)),
+		row(context, '6.3', symbol('C', 'x'), result),
+		row(context, '6.4', text(words.strip.margins), result),
+		...(notes ? noteBlocks(context) : [])
 	];
 }

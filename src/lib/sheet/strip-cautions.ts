@@ -5,6 +5,7 @@ import { fixed, formatEdge } from './edge';
 import { wrap } from './fitting';
 import { lettered } from './pen';
 import { CAP, heading, ruleNumber, type Block, type StripContext } from './strip-block';
+import { windowHarm } from './window-harm';
 import { fill } from './words';
 
 const LEADING = 3.75;
@@ -12,24 +13,21 @@ const LEADING = 3.75;
 const worst = (benefits: readonly Benefit[]): Benefit | null =>
 	benefits.reduce<Benefit | null>((a, b) => (a === null || b.gain_dB < a.gain_dB ? b : a), null);
 
-const harm = ({ mark }: StripContext, benefit: Benefit): { frequency: string; gain: string } => ({
-	frequency: formatEdge(benefit.frequency, 'nearest', mark, 'frequency'),
-	gain: `${fixed(Math.abs(benefit.gain_dB), 1, mark)}\u00a0dB`
+const harm = ({ mark }: StripContext, at: number, gain: number): { frequency: string; gain: string } => ({
+	frequency: formatEdge(at, 'nearest', mark, 'frequency'),
+	gain: `${fixed(Math.abs(gain), 1, mark)}\u00a0dB`
 });
 
-/** A window all of whose candidates make some line worse must not look inviting. */
-const windowHarm = (context: StripContext, window: Window, index: number): string[] => {
-	const { evaluation, words } = context;
-	const candidates = evaluation.candidates.filter((candidate) => candidate.window === index);
-	const losses = candidates.map(({ benefit }) => worst(benefit));
-	const least = losses.reduce<Benefit | null>(
-		(a, b) => (b !== null && (a === null || b.gain_dB > a.gain_dB) ? b : a),
-		null
-	);
-	if (least === null || least.gain_dB >= 0 || window.nominalEmpty) return [];
+/** A window all of whose values make some line worse must not look inviting. */
+const harmfulWindow = (context: StripContext, window: Window, index: number): string[] => {
+	const { evaluation, words, design } = context;
+	const chosen = design.choice.capacitance_F;
+	const home = chosen !== null && window.from <= chosen && chosen <= window.to;
+	const found = home || window.degenerate ? null : windowHarm(design, evaluation, index);
+	if (found === null) return [];
 	const name =
 		evaluation.windows.length > 1 ? `${words.strip.window} ${String(index + 1)}` : words.strip.window;
-	return [fill(words.caution.windowHarms, { window: name, ...harm(context, least) })];
+	return [fill(words.caution.windowHarms, { window: name, ...harm(context, found.frequency, found.gain) })];
 };
 
 const choiceHarm = (context: StripContext): string[] => {
@@ -39,7 +37,9 @@ const choiceHarm = (context: StripContext): string[] => {
 	if (chosen === null || least === null || least.gain_dB >= 0) return [];
 	const value = formatQuantity(chosen, 'capacitance', { decimalMark: mark });
 	const source = design.sources.find(({ id }) => id === least.source)?.label ?? least.source;
-	return [fill(words.caution.choiceHarms, { value, source, ...harm(context, least) })];
+	return [
+		fill(words.caution.choiceHarms, { value, source, ...harm(context, least.frequency, least.gain_dB) })
+	];
 };
 
 const advisory = ({ design, evaluation, words }: StripContext): string[] => {
@@ -59,7 +59,7 @@ const openPoints = (context: StripContext): string[] => {
 	return [
 		...(notes === '' ? [] : [fill(words.caution.open, { text: notes })]),
 		...choiceHarm(context),
-		...evaluation.windows.flatMap((window, index) => windowHarm(context, window, index)),
+		...evaluation.windows.flatMap((window, index) => harmfulWindow(context, window, index)),
 		...advisory(context)
 	];
 };

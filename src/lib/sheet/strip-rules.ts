@@ -30,6 +30,7 @@ import { fill } from './words';
 
 /** A second line stands this much lower; a row ends this much under its last line. */
 const LEADING = 3.7;
+const INDEX_ROOM = 0.4;
 const AXIS_ROW = 3.5;
 const BAR_HEIGHT = 3.4;
 const BAR_HEIGHT_LOW = 2.6;
@@ -157,10 +158,21 @@ const firstLine = (context: StripContext, row: RuleRow, x: number, y: number): I
 	];
 };
 
+/** How far each line stands under the row's first; a line that follows an index stands lower. */
+const baselines = (lines: RuleRow['lines']): number[] => {
+	let below = 0;
+	return lines.map((_, index) => {
+		const indexed = lines[index - 1]?.some(({ shift }) => shift === 'index') === true;
+		below += indexed ? LEADING + INDEX_ROOM : LEADING;
+		return below;
+	});
+};
+
 const ruleBlock = (context: StripContext, axis: Axis, row: RuleRow, least: number): Block => {
 	const { ink, k, width } = context;
-	const lines = Math.max(least, row.lines.length);
-	const height = (ROW + lines * LEADING) * k;
+	const bases = baselines(row.lines);
+	const lines = Math.max(least, bases.length);
+	const height = (ROW + Math.max(least * LEADING, bases.at(-1) ?? 0)) * k;
 	return {
 		height,
 		optional: true,
@@ -173,7 +185,7 @@ const ruleBlock = (context: StripContext, axis: Axis, row: RuleRow, least: numbe
 				...row.lines.flatMap((line, index) =>
 					runItems(line, {
 						x: x + NUMBER_WIDTH * k,
-						y: y + (BASE + (index + 1) * LEADING) * k,
+						y: y + (BASE + (bases[index] ?? 0)) * k,
 						cap: CAP * k,
 						fill: ink.graphite
 					})

@@ -5,7 +5,7 @@ import type { Box } from './paper';
 import { group, lettered } from './pen';
 import { chooseAxis } from './strip-bar';
 import { benefitBlocks } from './strip-benefit';
-import { blankBlocks, type BlankContext } from './strip-blank';
+import { blankBlocks, blankRules, type BlankContext } from './strip-blank';
 import { BASE, CAP, NUMBER_WIDTH, ROW, type Block, type StripContext } from './strip-block';
 import { cautionBlocks } from './strip-cautions';
 import { choiceBlock } from './strip-choice';
@@ -102,6 +102,21 @@ const pack = (blocks: readonly Block[], rooms: readonly number[]): Placed[] | nu
 	return placed;
 };
 
+const heightOf = (blocks: readonly Block[]): number => blocks.reduce((sum, block) => sum + block.height, 0);
+
+/** Two columns parted before a section's head, the left one as full as it goes; null when that leaves something over. */
+const packSections = (blocks: readonly Block[], rooms: readonly number[]): Placed[] | null => {
+	const [left = 0, right] = rooms;
+	if (right === undefined) return pack(blocks, rooms);
+	for (let at = blocks.length - 1; at > 0; at -= 1) {
+		const starts = blocks[at]?.heading === true && blocks[at - 1]?.heading !== true;
+		if (!starts) continue;
+		if (heightOf(blocks.slice(0, at)) > left + 1e-9 || heightOf(blocks.slice(at)) > right + 1e-9) continue;
+		return blocks.map((block, index) => ({ block, column: index < at ? 0 : 1 }));
+	}
+	return null;
+};
+
 const moreBlock = (count: number, context: Dress): Block => {
 	const { ink, k, words } = context;
 	return {
@@ -193,22 +208,43 @@ export function stripItems(input: StripInput): Item[] {
 	const rooms = columns.map(({ height }) => height - (PAD.top + PAD.foot) * k);
 	const dress = { ink, words, k, width };
 	if (context === null) {
-		const blocks = blankBlocks({ ...dress, design: blank });
-		const placed = pack(blocks, rooms) ?? cutToFit(blocks, rooms, dress);
+		const placed = placeBlank({ ...dress, design: blank }, rooms);
 		return [group(drawn(placed, columns, rooms, k), { role: 'strip' })];
 	}
 	const rows = rowsOf({ ...context, ...dress });
 	return [group(drawn(placeBlocks(rows, rooms, dress), columns, rooms, k), { role: 'strip' })];
 }
 
+/** A section torn apart is better than one without its formulas, but worse than one with fewer harmonics. */
 const placeBlocks = (
 	rows: (density: Density) => Block[],
 	rooms: readonly number[],
 	dress: Dress
 ): Placed[] => {
-	for (const density of DENSITIES) {
-		const placed = pack(rows(density), rooms);
-		if (placed !== null) return placed;
+	const roomy = DENSITIES.filter(({ formulas }) => formulas);
+	for (const [densities, fits] of [
+		[roomy, packSections],
+		[DENSITIES, pack]
+	] as const) {
+		for (const density of densities) {
+			const placed = fits(rows(density), rooms);
+			if (placed !== null) return placed;
+		}
 	}
 	return cutToFit(rows(DENSEST), rooms, dress);
+};
+
+/** A blank strip gives up its notes, then height of its rows, then rules; it never says so, since it states nothing. */
+const placeBlank = (context: BlankContext, rooms: readonly number[]): Placed[] => {
+	const rules = blankRules(context.design);
+	const ways = [
+		...[1, 0.88, 0.76].flatMap((scale) => [true, false].map((notes) => ({ scale, notes, rules }))),
+		...Array.from({ length: rules }, (_, index) => ({ scale: 0.76, notes: false, rules: rules - 1 - index }))
+	];
+	for (const way of ways) {
+		const blocks = blankBlocks(context, way);
+		const placed = packSections(blocks, rooms) ?? pack(blocks, rooms);
+		if (placed !== null) return placed;
+	}
+	return [];
 };
