@@ -30,8 +30,12 @@ describe('dampingBranches', () => {
 		expect(alone?.resistance).toBe(2.2);
 		expect(alone?.capacitance).toBe(1e-5);
 		expect(both?.best.resistance).toBeCloseTo(4.856, 3);
-		expect(both?.best.after.impedance).toBeLessThan(alone?.best.after.impedance ?? 0);
-		expect(both?.bought.impedance).toBeLessThan((both?.best.before.impedance ?? 0) / 5);
+	});
+	it('leaves a lower peak where the source is designed for too', () => {
+		const proposal = dampingBranches(design, mains, 2);
+		const peaks = proposal.ok ? proposal.branches.map(({ bought }) => bought.impedance) : [];
+		const [alone = 0, both = Infinity] = peaks;
+		expect(both).toBeLessThan(alone);
 	});
 	it('says where a curve does not reach', () => {
 		const curve = { id: 'c', label: 'c', fileName: 'c.csv', sha256: 'a'.repeat(64) };

@@ -7,6 +7,7 @@ const ROWS: readonly (readonly [RegExp, string])[] = [
 	[/^\/design\/inductor/, '3.1 Inductor'],
 	[/^\/design\/capacitor/, '3.2 Capacitor'],
 	[/^\/design\/damping/, '3.3 Damping'],
+	[/^\/design\/curves/, '3.4 Measured curves'],
 	[/^\/design\/sources\/(\d+)/, '4.# Source'],
 	[/^\/design\/sources/, '4 Sources'],
 	[/^\/design\/rules\/(\d+)/, '5.# Rule'],
