@@ -1,5 +1,6 @@
 /** The highest peak of the filter's output impedance over frequency and corners, for any Cx. */
 import { goldenMinimum } from '$lib/network/search';
+import type { Complex } from '$lib/network/complex';
 import { inductorImpedance, shuntImpedance, type CapacitorPart, type Filter } from '$lib/network/filter';
 import type { Interval } from '$lib/quantity/interval';
 
@@ -18,7 +19,7 @@ const PER_DECADE = 24;
 const WORTH_A_SEARCH = 0.8;
 
 /** An estimate this far from the limit, as a logarithm of the ratio, decides by itself. */
-const CLEAR = 0.7;
+const CLEAR = 0.3;
 
 /** All of the output admittance but Cx at one frequency [Ω, S]. */
 interface Sample {
@@ -45,7 +46,7 @@ const sampleAt = (corner: Corner, frequency: number): Sample => {
 };
 
 /** Output admittance 1/Z_C + 1/(Z_L + Z_s∥Z_x) [S]; written out, because it stands in the innermost loop. */
-const admittanceAt = (sample: Sample, part: CapacitorPart): { re: number; im: number } => {
+const admittanceAt = (sample: Sample, part: CapacitorPart): Complex => {
 	const { omega, source } = sample;
 	const capRe = part.esr ?? 0;
 	const capIm = omega * (part.esl ?? 0) - 1 / (omega * part.capacitance);
@@ -76,20 +77,28 @@ interface SampledCorner {
 
 const frequencyOf = (sample: Sample | undefined): number => (sample?.omega ?? NaN) / (2 * Math.PI);
 
-/** At the ends and between samples: where the susceptance changes sign, the conductance there tells the peak. */
+/** What a stretch between two samples may hold: a zero of the susceptance, or a sample above its neighbours [Ω]. */
+const estimateAt = (seen: readonly Complex[], sizes: readonly number[], index: number): number | null => {
+	const [here, next] = [seen[index], seen[index + 1]];
+	const size = sizes[index] ?? Infinity;
+	if (here === undefined) return null;
+	if (next !== undefined && here.im > 0 !== next.im > 0) {
+		const share = here.im / (here.im - next.im);
+		return 1 / Math.min(Math.abs(here.re + share * (next.re - here.re)), size);
+	}
+	const isLowest = size <= Math.min(sizes[index - 1] ?? Infinity, sizes[index + 1] ?? Infinity);
+	return isLowest ? 1 / size : null;
+};
+
 const summitsOf = ({ corner, samples }: SampledCorner, part: CapacitorPart): Summit[] => {
-	const admittances = samples.map((sample) => admittanceAt(sample, part));
-	return admittances.map((here, index): Summit => {
-		const next = admittances[index + 1] ?? here;
-		const crosses = here.im > 0 !== next.im > 0;
-		const share = crosses ? here.im / (here.im - next.im) : 0;
-		const conductance = here.re + share * (next.re - here.re);
-		return {
-			corner,
-			from: frequencyOf(samples[Math.max(0, index - 1)]),
-			to: frequencyOf(samples[Math.min(samples.length - 1, index + (crosses ? 2 : 1))]),
-			estimate: crosses ? 1 / Math.abs(conductance) : 1 / Math.hypot(here.re, here.im)
-		};
+	const seen = samples.map((sample) => admittanceAt(sample, part));
+	const sizes = seen.map(({ re, im }) => Math.hypot(re, im));
+	const last = samples.length - 1;
+	return seen.flatMap((_, index): Summit[] => {
+		const estimate = estimateAt(seen, sizes, index);
+		if (estimate === null) return [];
+		const from = frequencyOf(samples[Math.max(0, index - 1)]);
+		return [{ corner, from, to: frequencyOf(samples[Math.min(last, index + 2)]), estimate }];
 	});
 };
 
@@ -98,7 +107,7 @@ const refinedPeak = ({ corner, from, to, estimate }: Summit, part: CapacitorPart
 		const { re, im } = admittanceAt(sampleAt(corner, Math.exp(logarithm)), part);
 		return Math.hypot(re, im);
 	};
-	const at = goldenMinimum(sizeAt, Math.log(from), Math.log(to), 1e-12);
+	const at = goldenMinimum(sizeAt, Math.log(from), Math.log(to), 1e-11);
 	const found = 1 / Math.min(sizeAt(at), sizeAt(Math.log(from)), sizeAt(Math.log(to)));
 	return Number.isNaN(found) ? estimate : found;
 };
@@ -109,7 +118,7 @@ const refinedPeak = ({ corner, from, to, estimate }: Summit, part: CapacitorPart
  * @param corners filters with source impedances
  * @param range frequencies [Hz]
  * @param limit impedance near which the peak must be exact [Ω]
- * @returns a function from Cx to the peak [Ω]; an estimate where it lies a factor of two from the limit
+ * @returns a function from Cx to the peak [Ω]; an estimate where it lies further from the limit
  * @throws OutsideCurveError where a curve was not measured
  * @example outputPeak([corner], { from: 10, to: 145e3 }, 10)({ capacitance: 4.7e-6 }) // 10.39 Ω with 100 µH, 33 µH, 4.7 µF
  * Source: nodal analysis; agrees with circuit simulation.
