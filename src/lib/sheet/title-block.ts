@@ -17,7 +17,6 @@ const CAP = 2.5;
 const FACES = ['semibold', 'medium', 'regular'] as const;
 const TITLE_CAP = 3.5;
 const NUMBER_CAPS = [5, 3.5, 2.5] as const;
-const REVISION_CAP = 7;
 const PAD = 1.3;
 const SIGN = 6.2;
 /** Baselines in a row of 9 mm: caption, then value. */
@@ -133,7 +132,7 @@ const numberItems = ({ box, block, ink, words }: TitleBlockInput): Item[] => {
 	const right = box.x + COLUMNS[4] - PAD;
 	const y = box.y + ROW;
 	const caption = { cap: CAP, fill: ink.graphite };
-	const width = right - left - REVISION_CAP - PAD;
+	const width = right - left;
 	const number = block.number ?? '';
 	const cap =
 		NUMBER_CAPS.find((size) => shorten(number, { width, cap: size, face: 'bold' }) === number) ?? CAP;
