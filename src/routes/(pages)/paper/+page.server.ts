@@ -3,6 +3,6 @@ import { allowPublic } from '$lib/server/access';
 import type { PageServerLoad } from './$types';
 
 export const load: PageServerLoad = (event) => {
-	allowPublic(event);
+	allowPublic(event, { rate: true });
 	return { text: paperOfQuery(event.url.searchParams) };
 };

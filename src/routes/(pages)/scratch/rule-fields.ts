@@ -1,6 +1,7 @@
 /** The parameters of every kind of rule, in the order in which a row asks for them. */
 import type { RuleKind } from '$lib/design/design';
 import type { Quantity } from '$lib/quantity/unit';
+import { METHODS } from '$lib/rules/method';
 
 export type RuleField = { readonly key: string; readonly name: string } & (
 	| {
@@ -81,19 +82,7 @@ export const RULE_FIELDS: Readonly<Record<RuleKind, readonly RuleField[]>> = {
 	]
 };
 
-/** Full names, in the order in which a menu offers them. */
-export const RULE_NAMES: Readonly<Record<RuleKind, string>> = {
-	'capacitor-share': 'Share of C',
-	'resonance-guard': 'Resonance guard',
-	'reactance-limit': 'Reactance limit',
-	'minimum-benefit': 'Least benefit',
-	'inrush-current': 'Inrush current',
-	'voltage-rating': 'Ringing voltage',
-	'reactive-current': 'Reactive current',
-	'displacement-factor': 'Displacement factor',
-	discharge: 'Discharge',
-	'ripple-current': 'Ripple current',
-	'input-stability': 'Input stability',
-	'self-resonance': 'Self-resonance',
-	'manual-band': 'Crossed out by hand'
-};
+/** Names in the order in which a menu offers them. */
+export const RULE_NAMES = Object.fromEntries(
+	Object.values(METHODS).map(({ kind, name }) => [kind, name])
+) as Readonly<Record<RuleKind, string>>;

@@ -1,5 +1,5 @@
 /** The scratch sheet: what was typed, its past, and the drawing that follows it. */
-import { designToText, type Issue } from '$lib/design/parse';
+import { designToText } from '$lib/design/parse';
 import type { Design, Rule } from '$lib/design/design';
 import { newDesign } from '$lib/design/start';
 import { draw, type Drawn } from './draw';
