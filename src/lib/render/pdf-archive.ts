@@ -94,7 +94,7 @@ export function writeOutputIntent(context: PDFContext): PDFRef {
  * @example fileIdentifier(['a']).length // 32
  * Source: PDF Reference 1.4, 9.3.
  */
-export function fileIdentifier(parts: readonly string[]): string {
+export function fileIdentifier(parts: readonly (string | Uint8Array)[]): string {
 	return digest(parts)
 		.map((word) => word.toString(16).padStart(8, '0'))
 		.join('');

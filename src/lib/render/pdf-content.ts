@@ -42,6 +42,7 @@ const solid: readonly number[] = [];
 
 /** Remembers the page's state, so that only changes are written; compares what is asked for before writing it out. */
 class Pen {
+	readonly #colours = new Map<string, string>();
 	#fill = '';
 	#face = '';
 	readonly #stroke = { colour: '', width: -1, dash: '[] 0 d\n', cap: 'butt', join: 'miter' };
@@ -49,13 +50,19 @@ class Pen {
 	fill(colour: string): string {
 		if (colour === this.#fill) return '';
 		this.#fill = colour;
-		return fillCommand(colour);
+		return this.#command(colour);
+	}
+
+	#command(colour: string): string {
+		const command = this.#colours.get(colour) ?? fillCommand(colour);
+		this.#colours.set(colour, command);
+		return command;
 	}
 
 	#colour(colour: string): string {
 		if (colour === this.#stroke.colour) return '';
 		this.#stroke.colour = colour;
-		return fillCommand(colour).toUpperCase();
+		return this.#command(colour).toUpperCase();
 	}
 
 	#width(width: number): string {

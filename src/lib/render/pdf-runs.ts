@@ -23,19 +23,21 @@ const linesOf = (at: readonly number[], unit: (length: number) => number): Line[
 	return lines;
 };
 
+/** One number for a vector, and for its neighbours that rounding may have made of it; no sheet is 10 m wide. */
+const SPAN = 1_000_003;
+const NEIGHBOURS = [0, -1, 1, -SPAN, SPAN, -SPAN - 1, -SPAN + 1, SPAN - 1, SPAN + 1];
+
 /** Lines with the same vector, but for one unit that rounding gave or took, in order; all of a path has one pen. */
-const groupsOf = (lines: readonly Line[]): Line[][] => {
+const groupsOf = (lines: readonly Line[]): Iterable<Line[]> => {
 	const groups = new Map<number, Line[]>();
-	const keyOf = (dx: number, dy: number): number => dx * 1_000_003 + dy;
-	const near = [0, -1, 1];
 	for (const line of lines) {
-		const keys = near.flatMap((x) => near.map((y) => keyOf(line.dx + x, line.dy + y)));
-		const key = keys.find((candidate) => groups.has(candidate)) ?? keyOf(line.dx, line.dy);
-		const group = groups.get(key);
-		if (group === undefined) groups.set(key, [line]);
+		const own = line.dx * SPAN + line.dy;
+		let group: Line[] | undefined;
+		for (const step of NEIGHBOURS) group ??= groups.get(own + step);
+		if (group === undefined) groups.set(own, [line]);
 		else group.push(line);
 	}
-	return [...groups.values()];
+	return groups.values();
 };
 
 const written = (group: readonly Line[]): string => {

@@ -1,5 +1,5 @@
 /** Writes scenes as one PDF file, a page each, fit for the archive (PDF/A-1b) and the same to the byte each time. */
-import { PDFContext, PDFHexString, PDFString, PDFWriter, type PDFRef } from 'pdf-lib';
+import { PDFContext, PDFHexString, PDFString, PDFWriter, type PDFRawStream, type PDFRef } from 'pdf-lib';
 import type { Face, Scene } from '$lib/scene/scene';
 import { fileIdentifier, writeFacts, writeOutputIntent, type DocumentFacts } from './pdf-archive';
 import { faceNames, gatherCharacters, pageContent, POINTS_PER_MM, type Encode } from './pdf-content';
@@ -44,14 +44,14 @@ interface Pages {
 	readonly resources: PDFRef;
 }
 
-const writePage = ({ context, parent, resources }: Pages, scene: Scene, content: string): PDFRef =>
+const writePage = ({ context, parent, resources }: Pages, scene: Scene, content: PDFRawStream): PDFRef =>
 	context.register(
 		context.obj({
 			Type: 'Page',
 			Parent: parent,
 			MediaBox: [0, 0, points(scene.width), points(scene.height)],
 			Resources: resources,
-			Contents: context.register(context.flateStream(content))
+			Contents: context.register(content)
 		})
 	);
 
@@ -86,10 +86,11 @@ export async function toPdf(
 	const context = PDFContext.create();
 	const subsets = subsetsOf(all, fonts);
 	const encode = encoderOf(subsets);
-	const contents = all.map((scene) => pageContent(scene, encode));
+	const text = new TextEncoder();
+	const contents = all.map((scene) => context.flateStream(text.encode(pageContent(scene, encode))));
 	const parent = context.nextRef();
 	const pages = { context, parent, resources: writeResources(context, subsets, fonts) };
-	const kids = all.map((scene, index) => writePage(pages, scene, contents[index] ?? ''));
+	const kids = contents.map((content, index) => writePage(pages, all[index] ?? first, content));
 	context.assign(parent, context.obj({ Type: 'Pages', Kids: kids, Count: kids.length }));
 	const { info, metadata } = writeFacts(context, facts);
 	const catalogue = context.obj({
@@ -102,8 +103,8 @@ export async function toPdf(
 	});
 	const identifier = PDFHexString.of(
 		fileIdentifier([
-			...contents,
-			...all.map(({ width, height }) => `${String(width)} ${String(height)}`),
+			...contents.map(({ contents: bytes }) => bytes),
+			...all.map(({ width, height, language }) => `${String(width)} ${String(height)} ${language}`),
 			JSON.stringify(facts)
 		])
 	);

@@ -78,6 +78,11 @@ describe('toSvg', () => {
 		expect(toSvg(scene([text]))).toContain('>\u00a0a \u00a0b c\u00a0</text>');
 	});
 
+	it('refuses a place that is no number', () => {
+		const path: Item = { type: 'path', d: { ops: 'ML', at: [0, 0, NaN, 1] } };
+		expect(() => toSvg(scene([path]))).toThrow(RangeError);
+	});
+
 	it('writes one mark for each item, and no style attribute', () => {
 		fc.assert(
 			fc.property(fc.array(fc.nat(), { maxLength: 20 }), (seeds) => {

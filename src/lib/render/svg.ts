@@ -8,8 +8,19 @@ export const FONT_FAMILY = 'Barlow Sheet';
 
 const weights: Readonly<Record<Face, number>> = { regular: 400, medium: 500, semibold: 600, bold: 700 };
 
+/** Thousandths as they are written after a whole number; a double costs three times as much to write. */
+const decimals: readonly string[] = Array.from({ length: 1000 }, (_, thousandths) =>
+	thousandths === 0 ? '' : `.${String(thousandths).padStart(3, '0').replace(/0+$/, '')}`
+);
+
 /** Three decimals, without trailing zeros or a negative zero. */
-const written = (value: number): string => String(Math.round(value * 1000) / 1000 + 0);
+const written = (value: number): string => {
+	const thousandths = Math.round(value * 1000);
+	const size = Math.abs(thousandths);
+	if (!(size < 1e9)) throw new RangeError(`a length must be finite and under 1 km, got ${String(value)}`);
+	const whole = Math.floor(size / 1000);
+	return `${thousandths < 0 ? '-' : ''}${String(whole)}${decimals[size - 1000 * whole] ?? ''}`;
+};
 
 const attribute = (name: string, value: string | number | undefined): string =>
 	value === undefined ? '' : ` ${name}="${typeof value === 'number' ? written(value) : escapeXml(value)}"`;
