@@ -1,6 +1,6 @@
 import { isHttpError } from '@sveltejs/kit';
-import { describe, expect, it } from 'vitest';
-import { allowPublic, isCrossSite, isOtherName } from './access';
+import { afterEach, describe, expect, it, vi } from 'vitest';
+import { allowPublic, charged, isCrossSite, isOtherName } from './access';
 
 function visitor(address: string) {
 	const headers: Record<string, string> = {};
@@ -31,6 +31,52 @@ describe('allowPublic', () => {
 		expect(refused.length).toBeGreaterThan(0);
 		expect(refused.every((refusal) => isHttpError(refusal, 429))).toBe(true);
 		expect(event.headers['retry-after']).toBe('1');
+	});
+});
+
+describe('charged', () => {
+	afterEach(() => vi.restoreAllMocks());
+
+	/** The processor's clock, told to have run for so long. */
+	const working = (milliseconds: number) =>
+		vi.spyOn(process, 'cpuUsage').mockReturnValue({ user: milliseconds * 1000, system: 0 });
+	const taken = (address: string) => {
+		let count = 0;
+		try {
+			for (; count < 2000; count += 1) allowPublic(visitor(address), { rate: true });
+		} catch (refusal) {
+			if (!isHttpError(refusal, 429)) throw refusal;
+		}
+		return count;
+	};
+
+	it('charges nothing for ordinary work and returns what it gave', () => {
+		working(49);
+		allowPublic(visitor('192.0.2.21'), { rate: true });
+		expect(charged(visitor('192.0.2.21'), () => 42)).toBe(42);
+		expect(taken('192.0.2.21')).toBeGreaterThanOrEqual(599);
+	});
+
+	it('charges heavy work, whether it ends well or throws', () => {
+		allowPublic(visitor('192.0.2.22'), { rate: true });
+		working(10_050);
+		expect(charged(visitor('192.0.2.22'), () => 'done')).toBe('done');
+		expect(() =>
+			charged(visitor('192.0.2.22'), () => {
+				throw new RangeError('no');
+			})
+		).toThrow('no');
+		// 2 × 2000 tokens are owed; at 60 a second no busy machine gives them back in between.
+		expect(taken('192.0.2.22')).toBe(0);
+	});
+
+	it('lets the next request wait for what is owed', () => {
+		working(10_050);
+		const event = visitor('192.0.2.23');
+		allowPublic(event, { rate: true });
+		charged(event, () => null);
+		expect(() => allowPublic(event, { rate: true })).toThrow();
+		expect(Number(event.headers['retry-after'])).toBeGreaterThan(10);
 	});
 });
 

@@ -29,6 +29,31 @@ export function allowPublic(
 	error(429, `Too many requests from this address. Try again in ${wait} s.`);
 }
 
+/** What an ordinary design needs on any machine is free; beyond it 5 ms of the processor cost a request [ms]. */
+const FREE_TIME = 50;
+const TIME_PER_TOKEN = 5;
+
+/**
+ * Does the work of a public route and charges the address for a design that takes unusually long, so that few
+ * heavy requests use up the allowance of many light ones.
+ *
+ * @param event the request
+ * @param work calculation, synchronous
+ * @returns what the work returns
+ * @throws what the work throws
+ * @example const evaluation = charged(event, () => evaluate(design));
+ */
+export function charged<Result>(event: Pick<RequestEvent, 'getClientAddress'>, work: () => Result): Result {
+	const before = process.cpuUsage();
+	try {
+		return work();
+	} finally {
+		const { user, system } = process.cpuUsage(before);
+		const beyond = (user + system) / 1000 - FREE_TIME;
+		if (beyond > 0) publicRate.charge(event.getClientAddress(), beyond / TIME_PER_TOKEN);
+	}
+}
+
 const safeMethods = new Set(['GET', 'HEAD', 'OPTIONS', 'TRACE']);
 
 /** The media types that a page of any site can send here without asking first. */

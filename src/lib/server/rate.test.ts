@@ -53,6 +53,21 @@ describe('createRate', () => {
 	});
 });
 
+describe('charge', () => {
+	it('takes more than one token for work that needed more, and waits for all of them', () => {
+		const { rate } = withClock(3);
+		rate.take('192.0.2.9');
+		rate.charge('192.0.2.9', 599 + 120);
+		expect(rate.take('192.0.2.9')).toBe(3);
+	});
+
+	it('knows nothing of an address that never asked', () => {
+		const { rate } = withClock(3);
+		rate.charge('192.0.2.8', 1000);
+		expect(rate.take('192.0.2.8')).toBe(0);
+	});
+});
+
 describe('rateKey', () => {
 	it.each([
 		['192.0.2.1', '192.0.2.1', 'IPv4: the address'],

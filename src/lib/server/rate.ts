@@ -12,6 +12,8 @@ export interface RateOptions {
 export interface Rate {
 	/** Takes one token: 0 when there was one, else the whole seconds to wait [s]. */
 	take(address: string): number;
+	/** Takes tokens for work that an answered request turned out to need; the bucket may go below zero. */
+	charge(address: string, tokens: number): void;
 	readonly size: number;
 }
 
@@ -58,6 +60,10 @@ export function createRate(options: RateOptions): Rate {
 			if (buckets.size >= capacity) forgetQuietest();
 			buckets.set(key, { tokens: tokens >= 1 ? tokens - 1 : tokens, at: now });
 			return tokens >= 1 ? 0 : Math.ceil((1 - tokens) / perSecond);
+		},
+		charge(address, tokens) {
+			const bucket = buckets.get(rateKey(address));
+			if (bucket) bucket.tokens -= tokens;
 		},
 		get size() {
 			return buckets.size;

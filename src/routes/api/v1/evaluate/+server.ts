@@ -1,7 +1,7 @@
 import { json } from '@sveltejs/kit';
 import { evaluate } from '$lib/rules/evaluate';
 import { toAnswer } from '$lib/rules/answer';
-import { allowPublic } from '$lib/server/access';
+import { allowPublic, charged } from '$lib/server/access';
 import { readJson } from '$lib/server/body';
 import { problem } from '$lib/server/problem';
 import { readDesign } from '$lib/server/sheets';
@@ -13,5 +13,6 @@ export const POST: RequestHandler = async (event) => {
 	if (!body.ok) return body.response;
 	const design = readDesign(body.value);
 	if (!design.ok) return problem(400, 'The design cannot be evaluated as it is.', design.issues);
-	return json(toAnswer(evaluate(design.value)));
+	const evaluation = charged(event, () => evaluate(design.value));
+	return json(toAnswer(evaluation));
 };
