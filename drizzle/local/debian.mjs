@@ -42,7 +42,8 @@ export const toTest = {
 	'librsvg2-bin': program('rsvg-convert'),
 	'mupdf-tools': program('mutool'),
 	ghostscript: program('gs'),
-	'zbar-tools': program('zbarimg')
+	'zbar-tools': program('zbarimg'),
+	'python3-scikit-rf': () => existsSync('/usr/lib/python3/dist-packages/skrf')
 };
 
 /** @param {Packages} packages */
