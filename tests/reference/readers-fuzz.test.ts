@@ -1,7 +1,7 @@
 /** Any bytes give points or a named line, never a fault; READERS_FUZZ=1000000 in the environment tries more. */
 import { describe, expect, it } from 'vitest';
 import { readImpedanceTable } from '../../src/lib/network/impedance-table';
-import type { Fixture } from '../../src/lib/network/measurement';
+import type { Fixture, MeasuredPoint, Measurement, Unreadable } from '../../src/lib/network/measurement';
 import { readTouchstone } from '../../src/lib/network/touchstone';
 import { decode } from '../../src/routes/(pages)/scratch/measured';
 
@@ -66,6 +66,13 @@ const mutated = (start: Uint8Array, below: (most: number) => number): Uint8Array
 	return Uint8Array.from(bytes, (byte) => byte ?? 0);
 };
 
+const isSound = (answer: Measurement | Unreadable): boolean => {
+	if (!answer.ok) return answer.line >= 1 && Number.isInteger(answer.line) && answer.detail !== '';
+	const fine = ({ frequency, impedance: { re, im } }: MeasuredPoint): boolean =>
+		frequency > 0 && Number.isFinite(frequency + re + im);
+	return answer.points.length > 0 && answer.points.every(fine);
+};
+
 describe('the readers of measured files', () => {
 	it('answer any bytes with points or a line and a reason', () => {
 		const below = generator(SEED);
@@ -78,13 +85,7 @@ describe('the readers of measured files', () => {
 			const answer = /\.(csv|txt)$/.test(name)
 				? readImpedanceTable(text)
 				: readTouchstone(text, name, FIXTURES[below(3)] ?? 'reflection');
-			const sound = answer.ok
-				? answer.points.length > 0 &&
-					answer.points.every(
-						({ frequency, impedance }) =>
-							frequency > 0 && Number.isFinite(frequency + impedance.re + impedance.im)
-					)
-				: answer.line >= 1 && Number.isInteger(answer.line) && answer.detail !== '';
+			const sound = isSound(answer);
 			if (!sound) throw new Error(`${name}, case ${turn}: ${JSON.stringify([...bytes])}`);
 			seen[answer.ok ? 'read' : 'refused']++;
 		}
