@@ -37,7 +37,7 @@ describe('dampingBranches', () => {
 		const [alone = 0, both = Infinity] = peaks;
 		expect(both).toBeLessThan(alone);
 	});
-	it('says where a curve does not reach', () => {
+	it('seeks where a curve was measured, and says where it does not reach', () => {
 		const curve = { id: 'c', label: 'c', fileName: 'c.csv', sha256: 'a'.repeat(64) };
 		const points = { frequency_Hz: [1e5, 1e6], real_ohm: [0, 0], imaginary_ohm: [20, 200] };
 		const measured = {
@@ -46,6 +46,9 @@ describe('dampingBranches', () => {
 			inductor: { ...design.inductor, curve: 'c' }
 		};
 		const proposal = dampingBranches(measured, mains, 2);
-		expect(proposal.ok ? '' : proposal.reason).toContain('A measured curve covers');
+		expect(proposal.ok && proposal.range).toEqual({ from: 1e5, to: 145e3 });
+		const high = { ...measured, curves: [{ ...curve, ...points, frequency_Hz: [2e5, 1e6] }] };
+		const refused = dampingBranches(high, mains, 2);
+		expect(refused.ok ? '' : refused.reason).toContain('A measured curve covers');
 	});
 });

@@ -3,6 +3,7 @@ import type { Design, Source } from '$lib/design/design';
 import { proposeDamping, type DampingProposal } from '$lib/network/damping';
 import { outputPeak, type Peak } from '$lib/network/peak';
 import { asymptoticInductance, type SourceModel } from '$lib/network/source';
+import type { Interval } from '$lib/quantity/interval';
 import { nearestPreferred } from '$lib/quantity/series';
 import {
 	capacitorPart,
@@ -25,7 +26,7 @@ export interface Branch {
 }
 
 export type Proposal =
-	| { readonly ok: true; readonly branches: readonly Branch[] }
+	| { readonly ok: true; readonly branches: readonly Branch[]; readonly range: Interval }
 	| { readonly ok: false; readonly reason: string };
 
 const LOWEST_HZ = 10;
@@ -40,14 +41,17 @@ const inductanceOf = (model: SourceModel): number => {
  * @param ratio n = Cd/C, > 0
  */
 export function dampingBranches(design: Design, source: Source, ratio: number): Proposal {
-	const range = { from: LOWEST_HZ, to: Math.min(...design.switching.map((entry) => entry.frequencyMin_Hz)) };
+	const whole = { from: LOWEST_HZ, to: Math.min(...design.switching.map((entry) => entry.frequencyMin_Hz)) };
 	const filter = filterOf(design);
 	const model = sourceModel(design, source);
 	const { capacitance_F: chosen } = design.choice;
 	const choice = chosen === null ? null : capacitorPart(design, design.choice, chosen);
 	const curves = [...partCurves(filter), ...sourceCurves(model), ...(choice?.curve ? [choice.curve] : [])];
-	const gap = uncovered(curves, range);
-	if (gap !== null) return { ok: false, reason: gap };
+	const range = {
+		from: Math.max(whole.from, ...curves.map(({ first }) => first.frequency)),
+		to: Math.min(whole.to, ...curves.map(({ last }) => last.frequency))
+	};
+	if (!(range.from < range.to)) return { ok: false, reason: uncovered(curves, whole) ?? '' };
 	const { inductor, capacitor } = filter;
 	const branch = (name: string, sourceInductance: number): Branch => {
 		const best = proposeDamping(filter, ratio, { choice, source: model, range, sourceInductance });
@@ -64,6 +68,7 @@ export function dampingBranches(design: Design, source: Source, ratio: number): 
 	const inductance = inductanceOf(model);
 	return {
 		ok: true,
+		range,
 		branches: [branch('L alone', 0), ...(inductance > 0 ? [branch('L and source', inductance)] : [])]
 	};
 }
