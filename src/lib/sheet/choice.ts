@@ -10,7 +10,7 @@ import { shorten } from './fitting';
 import { roundDots } from './hatch';
 import { orientedAt } from './oriented';
 import { group, lettered, ruled } from './pen';
-import { capacitanceLine, xOf, yOf } from './plot';
+import { capacitanceLine, xOf, yOf, type Plot } from './plot';
 import { fill } from './words';
 
 /** The flag at k = 1 [mm]. */
@@ -71,6 +71,17 @@ const noteOf = (board: Board): string => {
 	return shorten(verdictNote(board, verdict), { width, cap: capOf(board), face: 'semibold' });
 };
 
+/** To the right up to the border; to the left where that has no room; with a shorter lead where neither has. */
+const endsOf = (plot: Plot, x: number, width: number, k: number): Pick<Flag, 'tip' | 'end'> => {
+	const left = plot.x + INSET * k;
+	const right = plot.x + plot.width - INSET * k;
+	const lead = LEAD * k;
+	if (x + lead + width <= right) return { tip: Math.max(x + lead, right - width), end: right };
+	if (x - lead - width >= left) return { tip: x - lead, end: x - lead - width };
+	if (right - x >= x - left) return { tip: right - width, end: right };
+	return { tip: left + width, end: left };
+};
+
 /** The flag, or null where the choice is not read inside the plot. */
 const flagOf = (board: Board): Flag | null => {
 	const { choice, readAt, k } = board;
@@ -84,11 +95,8 @@ const flagOf = (board: Board): Flag | null => {
 	const valueWidth = textWidth(value, 'bold', VALUE_CAP * k);
 	const noteWidth = textWidth(note, 'semibold', capOf(board));
 	const width = Math.max(valueWidth, noteWidth) + (2 * PADDING + POINT) * k;
-	const right = plot.x + plot.width - INSET * k;
-	const fitsRight = x + LEAD * k + width <= right;
-	const tip = fitsRight ? Math.max(x + LEAD * k, right - width) : x - LEAD * k;
-	const end = fitsRight ? right : tip - width;
-	return { x, y, tip, end, middle: clampMiddle(board, y), value, note };
+	const ends = endsOf(plot, x, width, k);
+	return { x, y, ...ends, middle: clampMiddle(board, y), value, note };
 };
 
 /**

@@ -47,6 +47,23 @@ export function limitText(finding: Finding, words: Words, mark: DecimalMark): st
 }
 
 /**
+ * Writes the same in fewer words, for a row where the rule's name needs the room: a dash for the dots, and of
+ * several bands how many there are and where the last one ends.
+ * @param finding what the rule found
+ * @param words fixed words
+ * @param mark decimal mark
+ * @returns e.g. '2 bands to 70.2 nF', 'not 0.19–4.46 µF'
+ * @example shortLimitText(guard, wordsOf('en'), '.') // 'not 4.63–98 nF'
+ */
+export function shortLimitText(finding: Finding, words: Words, mark: DecimalMark): string {
+	const bands = unitedBands(finding);
+	const most = Math.max(...bands.map(({ to }) => to));
+	if (bands.length > 1 && most < Infinity)
+		return fill(words.limit.bandsTo, { n: String(bands.length), to: formatEdge(most, 'up', mark) });
+	return limitText(finding, words, mark).replace(`${SPACE}… `, '–');
+}
+
+/**
  * Writes the closed interval of a window, its edges rounded inward.
  * @param window ends, 0 and Infinity for none [F]
  * @param words fixed words

@@ -160,7 +160,7 @@ const settleTitle = (below: Below): void => {
 	const label: Label = {
 		text: board.input.words.chart.paneTitle,
 		cap: capOf(board),
-		face: 'medium',
+		face: 'regular',
 		fill: board.input.ink.ink
 	};
 	const [along, across] = roomOf(label);

@@ -7,7 +7,7 @@ import { formatEdge } from './edge';
 import { shorten } from './fitting';
 import { dotCentres, dotRadius, hatchLines, roundDots } from './hatch';
 import { strokeOf } from './ink';
-import { limitText } from './limit';
+import { limitText, shortLimitText } from './limit';
 import { lettered, rectangle, ruled } from './pen';
 import { cornersOf } from './polygon';
 import { formulaRuns, runItems, wrapRuns, type Run } from './runs';
@@ -95,6 +95,8 @@ interface RuleRow {
 	readonly number: string;
 	readonly name: string;
 	readonly limit: string;
+	/** Said where the name needs the room. */
+	readonly shortLimit: string;
 	/** Whether an edge of it closes a window. */
 	readonly decides: boolean;
 	readonly finding: Finding | null;
@@ -125,7 +127,8 @@ const ruleRow = (context: StripContext, rule: Rule, index: number, formulas: boo
 	const finding = index < context.rulesShown ? findingOf(context.evaluation, rule.id) : null;
 	const number = `5.${String(index + 1)}`;
 	const name = context.words.rule[rule.kind];
-	if (finding === null) return { number, name, limit: '', decides: false, finding, lines: [] };
+	if (finding === null)
+		return { number, name, limit: '', shortLimit: '', decides: false, finding, lines: [] };
 	const override = overrideText(context, rule.id);
 	const overriding =
 		override === ''
@@ -135,6 +138,7 @@ const ruleRow = (context: StripContext, rule: Rule, index: number, formulas: boo
 		number,
 		name,
 		limit: limitText(finding, context.words, context.mark),
+		shortLimit: shortLimitText(finding, context.words, context.mark),
 		decides: context.resultShown && decides(context, rule.id),
 		finding,
 		lines: [...explanation(context, finding, formulas), ...overriding]
@@ -146,7 +150,9 @@ const firstLine = (context: StripContext, row: RuleRow, x: number, y: number): I
 	const cap = CAP * k;
 	const room = textRoom(context);
 	const face = row.decides ? 'bold' : 'semibold';
-	const limit = shorten(row.limit, { width: room, cap, face });
+	const nameRoom = room - textWidth(row.name, 'semibold', cap) - 1.5 * k;
+	const said = textWidth(row.limit, face, cap) <= nameRoom ? row.limit : row.shortLimit;
+	const limit = shorten(said, { width: room, cap, face });
 	const taken = limit === '' ? 0 : textWidth(limit, face, cap) + 1.5 * k;
 	const name = shorten(row.name, { width: room - taken, cap, face: 'semibold' });
 	const left = x + NUMBER_WIDTH * k;

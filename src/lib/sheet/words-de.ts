@@ -92,6 +92,7 @@ export const german: Words = {
 	limit: {
 		not: 'nicht {range}',
 		bands: '{n} Bänder, {range}',
+		bandsTo: '{n} Bänder bis {to}',
 		none: 'verbietet nichts',
 		all: 'verbietet jeden Wert',
 		notEvaluated: 'nicht berechnet',

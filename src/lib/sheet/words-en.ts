@@ -92,6 +92,7 @@ export const english: Words = {
 	limit: {
 		not: 'not {range}',
 		bands: '{n} bands, {range}',
+		bandsTo: '{n} bands to {to}',
 		none: 'forbids nothing',
 		all: 'forbids every value',
 		notEvaluated: 'not evaluated',

@@ -87,6 +87,7 @@ export interface Words {
 	readonly limit: {
 		readonly not: string;
 		readonly bands: string;
+		readonly bandsTo: string;
 		readonly none: string;
 		readonly all: string;
 		readonly notEvaluated: string;
