@@ -34,6 +34,17 @@ export function formatEdge(
 }
 
 /**
+ * Writes the upper end of a forbidden range in three digits, rounded outward.
+ * @param value finite value, > 0 [F]
+ * @param mark decimal mark
+ * @returns e.g. '70.2 nF'
+ * @example shortEdge(7.017e-8, '.') // '70.2 nF'
+ */
+export function shortEdge(value: number, mark: DecimalMark): string {
+	return trim(formatQuantity(value, 'capacitance', { digits: RANGE_DIGITS, round: 'up', decimalMark: mark }));
+}
+
+/**
  * Joins two written values, with the unit once where both share it.
  * @param from lower value as written
  * @param to upper value as written

@@ -1,6 +1,6 @@
 /** What a rule's finding says in one short phrase: its limit, or why it has none. */
 import type { Finding } from '$lib/rules/finding';
-import { formatEdge, joinRange, shortRange, type DecimalMark } from './edge';
+import { formatEdge, joinRange, shortEdge, shortRange, type DecimalMark } from './edge';
 import { unitedBands } from './strip-bar';
 import { fill, type Words } from './words';
 
@@ -59,7 +59,7 @@ export function shortLimitText(finding: Finding, words: Words, mark: DecimalMark
 	const bands = unitedBands(finding);
 	const most = Math.max(...bands.map(({ to }) => to));
 	if (bands.length > 1 && most < Infinity)
-		return fill(words.limit.bandsTo, { n: String(bands.length), to: formatEdge(most, 'up', mark) });
+		return fill(words.limit.bandsTo, { n: String(bands.length), to: shortEdge(most, mark) });
 	return limitText(finding, words, mark).replace(`${SPACE}… `, '–');
 }
 
